@@ -1,0 +1,97 @@
+import type Stripe from 'stripe'
+import type { CheckoutRecord, Line } from '../stripe-state.ts'
+
+/** A checkout as Stripe's API writes it. `payUrl` is the page where it is paid. */
+export function checkoutSession(checkout: CheckoutRecord, payUrl: string): Omit<Stripe.Checkout.Session, 'lastResponse'> {
+  return {
+    id: checkout.id,
+    object: 'checkout.session',
+    adaptive_pricing: null,
+    after_expiration: null,
+    allow_promotion_codes: null,
+    allowed_payment_method_types: checkout.allowedPaymentMethodTypes,
+    amount_subtotal: checkout.amountTotal,
+    amount_total: checkout.amountTotal,
+    automatic_tax: { enabled: false, liability: null, provider: null, status: null },
+    billing_address_collection: null,
+    cancel_url: checkout.cancelUrl,
+    client_reference_id: checkout.reference,
+    client_secret: null,
+    collected_information: null,
+    consent: null,
+    consent_collection: null,
+    created: checkout.created,
+    currency: checkout.currency,
+    currency_conversion: null,
+    custom_fields: [],
+    custom_text: { after_submit: null, shipping_address: null, submit: null, terms_of_service_acceptance: null },
+    customer: null,
+    customer_account: null,
+    customer_creation: 'if_required',
+    customer_details: checkout.customerEmail
+      ? { address: null, business_name: null, email: checkout.customerEmail, individual_name: null, name: null, phone: null, tax_exempt: 'none', tax_ids: null }
+      : null,
+    customer_email: checkout.customerEmail,
+    discounts: [],
+    expires_at: checkout.expiresAt,
+    integration_identifier: null,
+    invoice: null,
+    invoice_creation: null,
+    livemode: false,
+    locale: null,
+    managed_payments: null,
+    metadata: checkout.metadata,
+    mode: 'payment',
+    origin_context: null,
+    payment_intent: checkout.paymentId,
+    payment_link: null,
+    payment_method_collection: 'if_required',
+    payment_method_configuration_details: null,
+    payment_method_options: {},
+    payment_method_types: ['card'],
+    payment_status: checkout.paymentStatus,
+    permissions: null,
+    recovered_from: null,
+    saved_payment_method_options: null,
+    setup_intent: null,
+    shipping_address_collection: null,
+    shipping_cost: null,
+    shipping_options: [],
+    status: checkout.status,
+    submit_type: null,
+    subscription: null,
+    success_url: checkout.successUrl,
+    total_details: { amount_discount: 0, amount_shipping: 0, amount_tax: 0 },
+    ui_mode: 'hosted_page',
+    url: checkout.status === 'open' ? payUrl : null,
+    wallet_options: null,
+  }
+}
+
+/** One line of a checkout; only what the price data said is in it. */
+export function lineItem(line: Line, currency: string) {
+  const amount = line.unitAmount * line.quantity
+  return {
+    id: line.id,
+    object: 'item',
+    amount_discount: 0,
+    amount_subtotal: amount,
+    amount_tax: 0,
+    amount_total: amount,
+    currency,
+    description: line.name,
+    metadata: {},
+    price: {
+      id: line.id.replace(/^li_/, 'price_'),
+      object: 'price',
+      active: false,
+      currency,
+      livemode: false,
+      metadata: {},
+      type: 'one_time',
+      unit_amount: line.unitAmount,
+      unit_amount_decimal: String(line.unitAmount),
+    },
+    quantity: line.quantity,
+  }
+}

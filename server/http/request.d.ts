@@ -1,0 +1,21 @@
+import type { Caller } from '../caller.ts'
+
+declare global {
+  namespace Express {
+    interface Request {
+      caller: Caller | null
+      requestId: string
+    }
+    /** What a session says of the signed-in person; the rest is read afresh. */
+    interface User {
+      id: string
+    }
+  }
+}
+declare module 'express-session' {
+  interface SessionData {
+    startedAt: number
+    epoch: number
+    sharedScreen: boolean
+  }
+}

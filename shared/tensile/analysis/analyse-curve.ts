@@ -1,0 +1,67 @@
+import { elasticLine, type ElasticLine } from './elastic-line.ts'
+import { maximumForce, type Maximum } from './maximum-force.ts'
+import { offsetCrossing, type Crossing } from './offset-crossing.ts'
+import { recordEnd, type RecordEnd } from './record-end.ts'
+import { noiseOf, smoothed } from './smoothing.ts'
+import { stressStrain, type Curve, type StressStrain } from './stress-strain.ts'
+import { yieldPoint, type YieldPoint } from './yield-point.ts'
+
+/** All that a curve says, in full precision: stresses in MPa, strains as fractions of Le. */
+export type CurveAnalysis = {
+  curve: StressStrain
+  end: RecordEnd
+  line: ElasticLine | null
+  proof: Crossing | null
+  yielding: YieldPoint | null
+  /** Highest stress of the whole record up to fracture. */
+  highest: Maximum
+  /** Highest stress after the start of hardening; null when nothing hardens after the upper yield point. */
+  maximum: Maximum | null
+  /** Last point, where the record reaches fracture with the extensometer still on. */
+  fracture: Crossing | null
+}
+
+export type CurveInput = { curve: Curve; areaMm2: number; gaugeLengthMm: number; offsetPercent: number; elasticWindow?: { fromMPa: number; toMPa: number } }
+
+/** Without a collapse of the force in the record, a fall to this share of the maximum counts as having gone on to fracture. */
+const FALLEN = 0.9
+
+/** Scatter that the averaged curve may have, as a share of the proof strength, and the strain that its average may span. */
+const AIM = 0.0005
+const SPAN = 0.0005
+
+/** Reads a load-extension record once, in linear time. */
+export function analyseCurve({ curve: record, areaMm2, gaugeLengthMm, offsetPercent, elasticWindow }: CurveInput): CurveAnalysis {
+  const curve = stressStrain(record, areaMm2, gaugeLengthMm)
+  const end = recordEnd(curve)
+  const offset = offsetPercent / 100
+  const line = elasticLine(curve, end.peak, offset, elasticWindow)
+  const highest = maximumForce(curve, 0, end.last, end.broke)
+  if (!line) return { curve, end, line, proof: null, yielding: null, highest, maximum: highest, fracture: null }
+
+  const rough = offsetCrossing(curve, line, offset, end.last)
+  const middle = rough?.index ?? end.peak
+  const noise = Math.hypot(noiseOf(curve.stress, line.from, middle), line.slope * noiseOf(curve.strain, line.from, middle))
+  const half = halfWidth(curve.strain, middle, end.last, noise / (AIM * (rough?.stress ?? highest.stress)))
+  const smooth = half > 0 ? { strain: smoothed(curve.strain, half), stress: smoothed(curve.stress, half) } : curve
+  const proof = half > 0 ? offsetCrossing(smooth, line, offset, end.lastExtension) : rough
+  const scatter = noiseOf(curve.stress, line.from, Math.min(end.last, 2 * middle)) / Math.sqrt(2 * half + 1)
+  const yielding = yieldPoint({ raw: curve, smooth, half, scatter, line, proof, last: end.lastExtension })
+  const maximum = yielding ? (yielding.hardeningStrain === null ? null : maximumForce(curve, yielding.after, end.last, end.broke)) : highest
+  return { curve, end, line, proof, yielding, highest, maximum, fracture: fractureOf(curve, end, highest) }
+}
+
+function fractureOf({ strain, stress }: StressStrain, { last, lastExtension, broke }: RecordEnd, highest: Maximum): Crossing | null {
+  if (lastExtension < last) return null
+  if (!broke && !(stress[last]! <= FALLEN * highest.stress && last > highest.index)) return null
+  return { index: last, strain: strain[last]!, stress: stress[last]! }
+}
+
+/** Points on each side of the mean that bring the noise down as far as asked, within the strain that it may span. */
+function halfWidth(strain: Float64Array, index: number, last: number, noiseOverAim: number): number {
+  const wanted = Math.ceil((noiseOverAim ** 2 - 1) / 2)
+  if (wanted <= 0) return 0
+  let half = 0
+  while (half < wanted && index - half > 0 && index + half < last && strain[index + half]! - strain[index - half]! < SPAN) half++
+  return half
+}

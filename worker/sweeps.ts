@@ -1,0 +1,2 @@
+/** Chores that follow from no event, done every half minute by every worker; each is safe to do twice. */
+export const sweeps: readonly (() => Promise<unknown>)[] = []
