@@ -33,6 +33,7 @@ export default defineConfig({
           pool: 'forks',
           maxWorkers: 2,
           globalSetup,
+          setupFiles: ['tests/support/setup-database.ts'],
           testTimeout: 30_000,
           hookTimeout: 60_000,
         },

@@ -18,6 +18,7 @@ export function createSmtp(port: number, store: MailStore, faults: MailFaults): 
     allowInsecureAuth: true,
     size: maxBytes,
     disableReverseLookup: true,
+    closeTimeout: 200,
     logger: false,
     onData(stream, session, done) {
       const chunks: Buffer[] = []

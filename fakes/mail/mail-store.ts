@@ -56,7 +56,7 @@ async function readMail(folder: string, name: string): Promise<ReceivedMail> {
     from: mail.from?.text ?? '',
     subject: mail.subject ?? '',
     text: mail.text ?? '',
-    html: mail.html === false ? null : mail.html,
+    html: mail.html ? mail.html : null,
     messageId: mail.messageId ?? '',
     attachments: mail.attachments.map((attachment) => ({
       name: attachment.filename ?? 'attachment',

@@ -20,6 +20,7 @@ export function listenLocal(app: Express, port: number): Promise<Listening> {
 }
 
 function close(server: Server): Promise<void> {
+  if (!server.listening) return Promise.resolve()
   return new Promise((resolve, reject) => {
     server.close((error) => (error ? reject(error) : resolve()))
     server.closeAllConnections()

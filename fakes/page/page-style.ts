@@ -22,6 +22,12 @@ a { color: inherit; text-underline-offset: 3px; }
 table { width: 100%; border-collapse: collapse; }
 th { text-align: left; font-weight: 600; font-size: 13px; color: var(--quiet); border-bottom: 1px solid var(--edge); padding: 6px 12px 6px 0; white-space: nowrap; }
 td { border-bottom: 1px solid var(--line); padding: 8px 12px 8px 0; vertical-align: top; overflow-wrap: anywhere; }
+tbody th { border-bottom-color: var(--line); }
+tbody:last-child tr:last-child > * { border-bottom: 0; }
+.wide table { min-width: 720px; }
+td.fixed { white-space: nowrap; }
+.sheet + p, .scroll + p, input + p { margin-top: 12px; }
+form.row { margin-bottom: 8px; }
 th.num, td.num { text-align: right; padding-right: 0; white-space: nowrap; }
 tfoot td { border-bottom: 0; font-weight: 600; }
 label { display: block; font-size: 13px; margin: 16px 0 4px; }

@@ -51,6 +51,6 @@ try {
   await bundleClient()
   markBuilt(hash)
 } catch (error) {
-  console.error(explain(error))
+  console.error(error.errors ? error.message : explain(error)) // esbuild's list of errors says it all
   process.exitCode = 1
 }

@@ -12,7 +12,7 @@ import { readAccounts, welcome } from './launcher/welcome.mjs'
 import { announce, releaseLock, takeLock } from './launcher/data/run-lock.mjs'
 import { run } from './launcher/processes/run.mjs'
 import { say, step } from './launcher/say.mjs'
-import { embeddedFolders, embedPostgres, embedRedis } from './launcher/services/embedded.mjs'
+import { embeddedFolders, embedPostgres, embedRedis, endEmbedded } from './launcher/services/embedded.mjs'
 import { ensurePrograms } from './launcher/services/system-programs.mjs'
 import { isBuilt } from './launcher/sources-hash.mjs'
 import { endNoted } from './launcher/processes/supervise.mjs'
@@ -28,11 +28,15 @@ const keep = (service) => {
 }
 
 async function prepare() {
-  await step('Packages of the lock file', ensurePackages)
   const needed = [isEmbedded('postgres') && 'postgresql', isEmbedded('redis') && 'redis-server'].filter(Boolean)
   if (needed.length > 0) await step('Database and queue programs', () => ensurePrograms(needed))
-  const ended = await endNoted(programNames)
-  if (ended > 0) say(`Ended ${ended} left over from a start that was killed.`)
+  await step('Packages of the lock file', ensurePackages)
+  await endNoted(programNames) // after a kill -9 of an earlier launcher
+  if (needed.length === 0) return null
+  const folders = embeddedFolders()
+  if (folders.note) say(`Note: ${folders.note}`)
+  await endEmbedded(folders)
+  return folders
 }
 
 function portsWanted() {
@@ -47,10 +51,7 @@ function portsWanted() {
   ].filter(Boolean)
 }
 
-async function startServers(own) {
-  if (!isEmbedded('postgres') && !isEmbedded('redis')) return
-  const folders = embeddedFolders()
-  if (folders.note) say(`Note: ${folders.note}`)
+async function startServers(folders, own) {
   if (isEmbedded('postgres')) {
     await step('PostgreSQL', async () => {
       own.postgres = await embedPostgres(folders, own.ports.postgres, keep)
@@ -98,10 +99,10 @@ async function startPrograms(own) {
 async function start() {
   const missing = missingVariable()
   if (missing) throw new Failure(missing)
-  await prepare()
+  const folders = await prepare()
   const ports = await choosePorts(portsWanted())
   const own = { dev, ports, postgres: null, redis: null, stripe: isEmbedded('stripe'), mail: isEmbedded('mail') }
-  await startServers(own)
+  await startServers(folders, own)
   if (!dev) await step('Build', build)
   const accounts = await fillDatabase(own)
   await startPrograms(own)

@@ -35,9 +35,9 @@ async function perform(check, env, total) {
 async function main(total) {
   checkNodeVersion()
   listenForInterruption()
-  await step('Packages of the lock file', ensurePackages)
   const needed = ['postgresql', 'redis-server', 'poppler-utils', ...(withBrowser ? ['chromium'] : [])]
   await step('Programs', () => ensurePrograms(needed))
+  await step('Packages of the lock file', ensurePackages)
   let services
   await step('Throwaway PostgreSQL and Redis', async () => {
     services = await startThrowawayServices()

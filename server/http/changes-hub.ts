@@ -89,6 +89,6 @@ function tell({ caller, res }: Listener, told: Told): void {
 }
 
 function mayKnow(caller: Caller, { subject: name, id }: Change, { customerId, siteId }: Told): boolean {
-  const record = { customerId: customerId ?? undefined, siteId: siteId ?? undefined, personId: id, visibleToCustomer: true }
+  const record = { id, customerId: customerId ?? undefined, siteId: siteId ?? undefined, personId: id, visibleToCustomer: true }
   return caller.ability.can('read', subject(name as SubjectName, record) as never)
 }

@@ -10,7 +10,7 @@ export function accessibleWhere(ability: AppAbility, action: Action, name: Subje
   return rulesToCondition<AppAbility, WhereOptions, WhereOptions>(
     ability.rulesFor(action, name),
     (rule) => (rule.inverted ? { [Op.not]: toWhere(rule.conditions) } : toWhere(rule.conditions)),
-    { and: (all) => ({ [Op.and]: all }), or: (any) => ({ [Op.or]: any }), empty: () => ({}) },
+    { and: (all) => ({ [Op.and]: all }), or: (some) => ({ [Op.or]: some }), empty: () => ({}) },
   )
 }
 

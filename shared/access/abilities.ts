@@ -19,8 +19,8 @@ const roles: Record<Role, Grant> = {
     can('create', ['Job', 'File', 'Message'], own)
     can(['change', 'pay', 'cancel'], 'Job', own)
     can('answer', 'Hold', own)
-    can('read', 'Customer', own)
-    can('read', 'Person', { personId: id })
+    can('read', 'Customer', { id: customerId })
+    can('read', 'Person', { id })
     can('read', ['MethodOffer', 'Site'])
   },
   technician({ can, cannot }, { id, siteIds }) {
@@ -32,7 +32,7 @@ const roles: Record<Role, Grant> = {
     can('create', ['File', 'Message'], here)
     can('review', 'TestRun', here)
     cannot('review', 'TestRun', { performedById: id }).because('You ran this test. Someone else has to review it.')
-    can('read', 'Person', { personId: id })
+    can('read', 'Person', { id })
     can('read', ['MethodOffer', 'Site'])
   },
   manager({ can, cannot }, { id, siteIds }) {

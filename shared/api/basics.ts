@@ -18,3 +18,5 @@ export const Password = z.string().min(12, 'at least 12 characters').max(128, 'a
 /** Part of a list and where the next part begins; `next` is null at the end. */
 export const page = <T extends z.ZodType>(item: T) => z.strictObject({ items: z.array(item), next: z.string().nullable() })
 export const PageQuery = { after: z.string().max(200).optional(), limit: z.coerce.number().int().min(1).max(200).default(50) }
+/** Of a list whose parts begin after an id. */
+export const PageById = { ...PageQuery, after: Id.optional() }

@@ -13,7 +13,10 @@ export const attachFile = endpoint({ method: 'post', path: '/jobs/:jobId/files',
 export const addPhoto = endpoint({ method: 'post', path: '/samples/:sampleId/photos', can: ['receive', 'Sample'], params: z.strictObject({ sampleId: Id }), takes: 'file', response: FileInJob })
 /** The file of a measured record, kept beside the readings taken from it. */
 export const addRecord = endpoint({ method: 'post', path: '/test-runs/:testRunId/records', can: ['record', 'TestRun'], params: z.strictObject({ testRunId: Id }), takes: 'file', response: FileInJob })
-export const downloadFile = endpoint({ method: 'get', path: '/files/:fileId', can: ['read', 'File'], params: OneFile, answers: 'file' })
+/** As it came, or a picture's copy for display. */
+export const downloadFile = endpoint({
+  method: 'get', path: '/files/:fileId', can: ['read', 'File'], params: OneFile, query: z.strictObject({ as: z.enum(['original', 'display']).default('original') }), answers: 'file',
+})
 /** Only while the job is a draft. */
 export const removeFile = endpoint({ method: 'delete', path: '/files/:fileId', can: ['create', 'File'], params: OneFile, response: z.object({ removed: z.literal(true) }) })
 

@@ -1,6 +1,6 @@
 import * as z from 'zod'
 import { Piece } from '../method/piece.ts'
-import { Day, Id, Instant, Money, OptionalText, Text } from './basics.ts'
+import { Day, Id, Instant, Money, OptionalText } from './basics.ts'
 import { Currency } from './words.ts'
 
 export const Requirement = z.strictObject({
@@ -20,7 +20,7 @@ export const OrderColumn = z.strictObject({
 export type OrderColumn = z.infer<typeof OrderColumn>
 
 export const OrderSample = z.strictObject({
-  heat: OptionalText(60), lot: OptionalText(60), material: Text(100), piece: Piece,
+  heat: OptionalText(60), lot: OptionalText(60), material: OptionalText(100), piece: Piece,
   tests: z.array(ColumnKey).max(20),
   /** Parameters that differ from the column's for this sample alone. */
   overrides: z.record(ColumnKey, z.record(z.string().max(60), z.unknown())).default({}),

@@ -1,5 +1,5 @@
 import * as z from 'zod'
-import { Day, Email, Id, Instant, page, PageQuery, Text, Version } from './basics.ts'
+import { Day, Email, Id, Instant, page, PageById, Text, Version } from './basics.ts'
 import { endpoint } from './endpoint.ts'
 import { Right, Role } from './words.ts'
 
@@ -15,7 +15,7 @@ export type Person = z.infer<typeof Person>
 
 export const listPeople = endpoint({
   method: 'get', path: '/people', can: ['read', 'Person'],
-  query: z.strictObject({ ...PageQuery, role: Role.optional(), search: z.string().max(100).optional() }), response: page(Person),
+  query: z.strictObject({ ...PageById, role: Role.optional(), search: z.string().max(100).optional() }), response: page(Person),
 })
 
 /** Colleagues at a site are invited by its manager, clients for their organisation. */

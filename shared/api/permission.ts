@@ -9,4 +9,4 @@ export const subjectNames = [
 export type SubjectName = (typeof subjectNames)[number]
 
 /** The plain fields that rules look at. A record has those that apply to it. */
-export type SubjectFields = { customerId?: string; siteId?: string; personId?: string; performedById?: string; role?: string; visibleToCustomer?: boolean; state?: string }
+export type SubjectFields = { id?: string; customerId?: string; siteId?: string; personId?: string; performedById?: string; role?: string; visibleToCustomer?: boolean; state?: string }

@@ -1,5 +1,5 @@
 import * as z from 'zod'
-import { Day, Id, Instant, Money, page, PageQuery } from './basics.ts'
+import { Day, Id, Instant, Money, page, PageById } from './basics.ts'
 import { endpoint } from './endpoint.ts'
 import { Currency, ReportState } from './words.ts'
 
@@ -9,7 +9,7 @@ export const ReportRow = z.object({
 })
 export type ReportRow = z.infer<typeof ReportRow>
 const OneReport = z.strictObject({ reportId: Id })
-export const listReports = endpoint({ method: 'get', path: '/reports', can: ['read', 'Report'], query: z.strictObject({ ...PageQuery, search: z.string().trim().max(100).optional() }), response: page(ReportRow) })
+export const listReports = endpoint({ method: 'get', path: '/reports', can: ['read', 'Report'], query: z.strictObject({ ...PageById, search: z.string().trim().max(100).optional() }), response: page(ReportRow) })
 export const readReport = endpoint({ method: 'get', path: '/reports/:reportId', can: ['read', 'Report'], params: OneReport, response: ReportRow })
 export const downloadReport = endpoint({ method: 'get', path: '/reports/:reportId/pdf', can: ['read', 'Report'], params: OneReport, answers: 'file' })
 
@@ -30,7 +30,7 @@ export const InvoiceRow = z.object({
   paidMinor: Money, refundedMinor: Money,
 })
 export type InvoiceRow = z.infer<typeof InvoiceRow>
-export const listInvoices = endpoint({ method: 'get', path: '/invoices', can: ['read', 'Invoice'], query: z.strictObject(PageQuery), response: page(InvoiceRow) })
+export const listInvoices = endpoint({ method: 'get', path: '/invoices', can: ['read', 'Invoice'], query: z.strictObject(PageById), response: page(InvoiceRow) })
 export const readInvoice = endpoint({ method: 'get', path: '/invoices/:invoiceId', can: ['read', 'Invoice'], params: z.strictObject({ invoiceId: Id }), response: InvoiceRow })
 
 export const reportEndpoints = [listReports, readReport, downloadReport, checkReport, listInvoices, readInvoice]

@@ -1,5 +1,5 @@
 import * as z from 'zod'
-import { Id, Instant, OptionalText, page, PageQuery, Text, Version } from './basics.ts'
+import { Id, Instant, OptionalText, page, PageById, Text, Version } from './basics.ts'
 import { endpoint } from './endpoint.ts'
 import { FileInJob, Hold, SampleInJob } from './jobs.ts'
 
@@ -29,7 +29,7 @@ const OneSample = z.strictObject({ sampleId: Id })
 
 export const listSamples = endpoint({
   method: 'get', path: '/samples', can: ['read', 'Sample'],
-  query: z.strictObject({ ...PageQuery, search: z.string().trim().max(100).optional(), state: z.enum(['expected', 'received', 'in work', 'done', 'missing', 'void']).optional(), jobId: Id.optional() }),
+  query: z.strictObject({ ...PageById, search: z.string().trim().max(100).optional(), state: z.enum(['expected', 'received', 'in work', 'done', 'missing', 'void']).optional(), jobId: Id.optional() }),
   response: page(SampleRow),
 })
 export const readSample = endpoint({ method: 'get', path: '/samples/:sampleId', can: ['read', 'Sample'], params: OneSample, response: Sample })

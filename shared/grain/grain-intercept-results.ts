@@ -57,7 +57,7 @@ export function grainInterceptResults(
 }
 
 function said(rounded: string, unit: string): string {
-  return unit === '' ? rounded : `${rounded} ${unit}`
+  return unit === '' ? rounded : `${rounded} ${unit === '1/mm' ? '/mm' : unit}`
 }
 
 function short(value: number): string {

@@ -12,7 +12,7 @@ import { transfersOf } from './tell/transfers-of.ts'
 import { whyUnplaced } from './tell/why-unplaced.ts'
 
 /** How many steps all constructions together may place: keeps the time for a large shop in bounds. */
-const stepsToPlace = 6000
+const stepsToPlace = 1500
 /** How often a plan that leaves out steps which a bench could do is built again with these first. */
 const rescues = 4
 

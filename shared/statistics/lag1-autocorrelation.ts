@@ -1,5 +1,6 @@
+import { deviationsFrom } from './deviations-from.ts'
 import { mean } from './mean.ts'
-import { sum } from './sum.ts'
+import { sumOfProducts } from './sum-of-products.ts'
 
 /**
  * Autocorrelation of neighbours, r₁ = Σ(xᵢ − x̄)(xᵢ₊₁ − x̄) / Σ(xᵢ − x̄)², as NIST StRD defines it; no unit. Two or more
@@ -8,9 +9,7 @@ import { sum } from './sum.ts'
  */
 export function lag1Autocorrelation(values: ArrayLike<number>): number | undefined {
   if (values.length < 2) return undefined
-  const centre = mean(values)
-  const deviations = Array.from(values, (value) => value - centre)
-  const squares = sum(deviations.map((d) => d * d))
-  if (squares === 0) return undefined
-  return sum(deviations.map((d, i) => d * (deviations[i + 1] ?? 0))) / squares
+  const deviations = deviationsFrom(values, mean(values))
+  const squares = sumOfProducts(deviations, deviations)
+  return squares === 0 ? undefined : sumOfProducts(deviations, deviations.subarray(1), values.length - 1) / squares
 }

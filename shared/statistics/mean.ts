@@ -1,3 +1,4 @@
+import { deviationsFrom } from './deviations-from.ts'
 import { sum } from './sum.ts'
 
 /**
@@ -7,5 +8,5 @@ import { sum } from './sum.ts'
 export function mean(values: ArrayLike<number>): number {
   if (values.length === 0) throw new RangeError('the mean needs at least one value')
   const first = sum(values) / values.length
-  return first + sum(Array.from(values, (value) => value - first)) / values.length
+  return first + sum(deviationsFrom(values, first)) / values.length
 }

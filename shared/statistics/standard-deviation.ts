@@ -1,5 +1,7 @@
+import { deviationsFrom } from './deviations-from.ts'
 import { mean } from './mean.ts'
 import { sum } from './sum.ts'
+import { sumOfProducts } from './sum-of-products.ts'
 
 /**
  * Sample standard deviation, s = √(Σ(x − x̄)² / (n − 1)), in the unit of the values; two or more values. Two passes with
@@ -8,8 +10,7 @@ import { sum } from './sum.ts'
  */
 export function standardDeviation(values: ArrayLike<number>): number {
   if (values.length < 2) throw new RangeError('a standard deviation needs at least two values')
-  const centre = mean(values)
-  const deviations = Array.from(values, (value) => value - centre)
-  const squares = sum(deviations.map((d) => d * d)) - sum(deviations) ** 2 / values.length
+  const deviations = deviationsFrom(values, mean(values))
+  const squares = sumOfProducts(deviations, deviations) - sum(deviations) ** 2 / values.length
   return Math.sqrt(Math.max(0, squares) / (values.length - 1))
 }

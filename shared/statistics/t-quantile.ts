@@ -4,6 +4,8 @@ import { normalDensity, normalProbability } from './normal.ts'
 
 /** Above this many degrees of freedom the normal distribution with its first two corrections is exact to a double. */
 const NEARLY_NORMAL = 1e6
+/** The square of t must stay a number. */
+const LARGEST = 1e150
 
 /**
  * Quantile of Student's t: the value that t stays below with `probability` (one-sided, 0 < p < 1), for `degreesOfFreedom` > 0,
@@ -26,9 +28,9 @@ function studentParts(t: number, v: number): Parts {
   const square = t * t
   const x = v / (v + square)
   const y = square / (v + square)
-  const beta = incompleteBetaHalf(v / 2, x, y)
+  const { value, complement } = incompleteBetaHalf(v / 2, x, y)
   const density = (gammaRatioHalf(v / 2) / Math.sqrt(v * Math.PI)) * Math.exp((-(v + 1) / 2) * Math.log1p(square / v))
-  return { tail: beta / 2, middle: (1 - beta) / 2, density }
+  return { tail: value / 2, middle: complement / 2, density }
 }
 
 /** z with the terms in 1/v and 1/v² of the Cornish-Fisher expansion (Abramowitz and Stegun 26.7.5). */
@@ -54,9 +56,11 @@ function solve(probability: number, parts: (t: number) => Parts): number {
     // d ln(value) / d ln(t); negative for the tail
     const slope = ((useTail ? -1 : 1) * now.density * t) / value
     let next = t * Math.exp(Math.log(target / value) / slope)
-    if (!(next > low && next < high)) next = high === Infinity ? t * 4 : (low + high) / 2
+    if (high === Infinity) next = Math.min(next, t * 16)
+    if (!(next > low && next < high)) next = high === Infinity ? t * 4 : low > 0 ? Math.sqrt(low) * Math.sqrt(high) : high / 4
     if (Math.abs(next - t) <= 2e-16 * t) break
     t = next
+    if (t > LARGEST) throw new RangeError('the quantile is too large for a number')
   }
   return sign * t
 }

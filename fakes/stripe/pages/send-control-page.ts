@@ -50,13 +50,13 @@ ${events.length === 0 ? html`<p class="quiet">None yet: they follow from payment
 }
 
 function checkoutTable(checkouts: CheckoutRecord[]): Html {
-  return html`<div class="scroll"><table>
+  return html`<div class="scroll wide"><table>
 <thead><tr><th>Reference</th><th>State</th><th>Amount</th><th>Do</th></tr></thead>
 <tbody>${checkouts.map(
     (checkout) => html`<tr>
 <td>${checkout.reference ?? 'none'}<br><span class="quiet code">${checkout.id.slice(0, 20)}…</span></td>
-<td>${checkout.status}, ${checkout.paymentStatus}</td>
-<td>${money(checkout.amountTotal, checkout.currency)}</td>
+<td class="fixed">${checkout.status}, ${checkout.paymentStatus}</td>
+<td class="fixed">${money(checkout.amountTotal, checkout.currency)}</td>
 <td>${checkout.status === 'open' ? html`<a href="/pay/${checkout.id}">Open</a> ${(['pay', 'decline', 'expire'] as const).map((action) => checkoutForm(checkout.id, action))}` : ''}
 ${forgeries.map((how) => button('forge', { checkoutId: checkout.id, how }, `Forge: ${forgeryNames[how]}`))}</td>
 </tr>`,
@@ -68,12 +68,12 @@ function checkoutForm(checkoutId: string, action: 'pay' | 'decline' | 'expire'):
 }
 
 function eventTable(events: EventRecord[]): Html {
-  return html`<div class="scroll"><table>
+  return html`<div class="scroll wide"><table>
 <thead><tr><th>Event</th><th>Webhook</th><th>Attempts</th><th>Last answer</th><th>Do</th></tr></thead>
 <tbody>${events.map(
     (event) => html`<tr>
 <td>${event.type}<br><span class="quiet code">${event.id}</span></td>
-<td>${event.delivery.state}</td><td>${event.delivery.attempts}</td><td>${event.delivery.lastAnswer ?? ''}</td>
+<td class="fixed">${event.delivery.state}</td><td>${event.delivery.attempts}</td><td>${event.delivery.lastAnswer ?? ''}</td>
 <td>${button('resend', { eventId: event.id }, 'Send again')}</td></tr>`,
   )}</tbody></table></div>`
 }

@@ -2,13 +2,13 @@ import { randomUUID } from 'node:crypto'
 import { once } from 'node:events'
 import fs from 'node:fs'
 import path from 'node:path'
-import { identify, isSame, processesIn, signal } from './processes/processes.mjs'
+import { identify, isSame, signal } from './processes/processes.mjs'
 import { dataFolder, inData } from './data/project.mjs'
 import { anyFreePort } from './processes/ports.mjs'
 import { randomSecret } from './data/secrets.mjs'
 import { makeCluster } from './services/make-cluster.mjs'
-import { endLeftovers, programsFor, startPostgres } from './services/postgres.mjs'
-import { redisUrl, startRedis } from './services/redis.mjs'
+import { endPostgresIn, programsFor, startPostgres } from './services/postgres.mjs'
+import { endRedisIn, redisUrl, startRedis } from './services/redis.mjs'
 import { databaseUrl, ensureRoles, SUPERUSER } from './services/roles.mjs'
 import { serverFolders } from './services/server-folders.mjs'
 
@@ -25,8 +25,8 @@ async function sweep() {
     const note = inData(name, 'owner.json')
     if (fs.existsSync(note) && isSame(JSON.parse(fs.readFileSync(note, 'utf8')))) continue
     for (const home of [inData(name), elsewhere(name)]) {
-      await endLeftovers(path.join(home, 'postgres'))
-      for (const pid of processesIn(path.join(home, 'redis'), 'redis-server')) signal(pid, 'SIGKILL')
+      await endPostgresIn(path.join(home, 'postgres'))
+      await endRedisIn(path.join(home, 'redis'))
       fs.rmSync(home, { recursive: true, force: true })
     }
   }
@@ -63,7 +63,7 @@ export async function startThrowawayServices() {
       await end
       clearTimeout(timer)
     }
-    await endLeftovers(folders.postgres)
+    await endPostgresIn(folders.postgres)
     for (const home of new Set([folders.home, folder])) fs.rmSync(home, { recursive: true, force: true })
   }
 

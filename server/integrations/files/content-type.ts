@@ -1,4 +1,4 @@
-import type { Readable } from 'node:stream'
+import { Readable } from 'node:stream'
 import { fileTypeFromStream } from 'file-type/node'
 import { FileError } from './file-error.ts'
 
@@ -54,7 +54,8 @@ function acceptedList(): string {
 }
 
 async function detect(open: () => Promise<Readable>): Promise<string | undefined> {
-  const content = await open()
+  // The detector finds nothing at all in a stream of objects, so the bytes are handed on as bytes.
+  const content = Readable.from(bytesOf(await open()), { objectMode: false })
   try {
     return (await fileTypeFromStream(content))?.mime
   } finally {

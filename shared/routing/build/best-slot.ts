@@ -6,28 +6,41 @@ import { findSlot, type Slot } from './find-slot.ts'
 const ahead = 5
 
 /**
- * The placement of a step that lets its sample be done soonest: of each bench the earliest start, of these the one from which the sample's
- * next steps, at sites that can do them and couriers between, end first. Ties go to the earlier end, the shorter way, the bench that can do less.
+ * The placement of a step that lets its sample be done soonest: of each site the earliest end (of benches that tie the one that can do less),
+ * of these the one from which the sample's next steps, at sites that can do them and couriers between, end first. Ties go to the earlier end,
+ * then to the site where the sample is.
  */
 export function bestSlot(bookings: Bookings, step: number, from: number, latestEnd = Infinity): Slot | null {
   const { layout, tracks } = bookings
   const { choices, sample, sites } = layout.steps[step]!
-  const rest = layout.shop.sites.length > 1 ? laterSteps(bookings, step) : []
-  const stays = sites.length > 1 || rest.some((each) => layout.steps[each]!.sites.length > 1 || layout.steps[each]!.sites[0] !== sites[0])
-  let best: { slot: Slot; cost: number[] } | null = null
-  for (const choice of choices) {
-    if (best && !stays && latestEnd > best.slot.end + 1) latestEnd = best.slot.end
-    const slot = findSlot(bookings, step, choice, from, latestEnd)
+  if (sites.length === 1) return bestAt(bookings, step, sites[0]!, choices, from, latestEnd)
+  const rest = laterSteps(bookings, step)
+  const here = tracks[sample]!.stays.at(-1)?.site ?? layout.sampleSites[sample]!
+  let best: { slot: Slot; site: number; done: number } | null = null
+  for (const site of sites) {
+    const slot = bestAt(bookings, step, site, choices, from, latestEnd)
     if (!slot) continue
-    const site = layout.benchSites[choice.bench]!
-    const cost = [stays ? doneBy(bookings, rest, site, slot.end) : slot.end, slot.end, stays ? moves(tracks[sample]!.stays.at(-1)?.site ?? layout.sampleSites[sample]!, site) : 0, breadth(bookings, choice)]
-    if (!best || isLess(cost, best.cost)) best = { slot, cost }
+    const done = doneBy(bookings, rest, site, slot.end)
+    const isBetter = !best || done < best.done || (done === best.done && (slot.end < best.slot.end || (slot.end === best.slot.end && site === here)))
+    if (isBetter) best = { slot, site, done }
   }
   return best?.slot ?? null
 }
 
-const moves = (from: number, to: number) => (from === to ? 0 : 1)
-const breadth = ({ layout }: Bookings, { bench }: Choice) => layout.shop.benches[bench]!.does.length
+function bestAt(bookings: Bookings, step: number, site: number, choices: Choice[], from: number, latestEnd: number): Slot | null {
+  const { benchSites, shop } = bookings.layout
+  let best: Slot | null = null
+  let breadth = Infinity
+  for (const choice of choices) {
+    if (benchSites[choice.bench] !== site) continue
+    const does = shop.benches[choice.bench]!.does.length
+    const slot = findSlot(bookings, step, choice, from, best ? Math.min(latestEnd, does < breadth ? best.end : best.end - 1) : latestEnd)
+    if (!slot) continue
+    best = slot
+    breadth = does
+  }
+  return best
+}
 
 function laterSteps({ layout, placed }: Bookings, step: number): number[] {
   const mine = layout.bySample[layout.steps[step]!.sample]!
@@ -41,21 +54,16 @@ function laterSteps({ layout, placed }: Bookings, step: number): number[] {
 
 /** The earliest end of `rest`, done in this order on free benches that never close, for a sample that is free at `site` at `time`. */
 function doneBy({ layout }: Bookings, rest: number[], site: number, time: number): number {
-  let at = new Map([[site, time]])
+  let [places, times] = [[site], [time]]
   for (const next of rest) {
     const { sites, length } = layout.steps[next]!
-    const then = new Map<number, number>()
-    for (const to of sites) {
+    const then = sites.map((to) => {
       let soonest = Infinity
-      for (const [here, free] of at) soonest = Math.min(soonest, layout.couriers.arrival(here, to, free) + length)
-      then.set(to, soonest)
-    }
-    at = then
+      for (let i = 0; i < places.length; i++) soonest = Math.min(soonest, layout.couriers.arrival(places[i]!, to, times[i]!))
+      return soonest + length
+    })
+    places = sites
+    times = then
   }
-  return Math.min(...at.values())
-}
-
-function isLess(a: number[], b: number[]): boolean {
-  for (let i = 0; i < a.length; i++) if (a[i] !== b[i]) return a[i]! < b[i]!
-  return false
+  return times.reduce((least, each) => Math.min(least, each), Infinity)
 }

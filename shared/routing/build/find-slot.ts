@@ -34,22 +34,22 @@ function settle(bookings: Bookings, step: number, choice: Choice, person: number
   const attended = Math.max(1, attendedLength)
   let holdup: Holdup = 'ready'
   let start = from
-  const move = (to: number, why: Holdup) => {
-    if (to <= start) return
-    start = to
-    holdup = why
-  }
   for (;;) {
     const before = start
-    move(tracks[sample]!.firstFree(site, start, length), 'sample')
+    let next = tracks[sample]!.firstFree(site, start, length)
+    if (next > start) [start, holdup] = [next, 'sample']
     if (start + length > limit) return null
-    move(firstInside(bench.open, start, openLength), 'bench-hours')
+    next = firstInside(bench.open, start, openLength)
+    if (next > start) [start, holdup] = [next, 'bench-hours']
     if (start + length > limit) return null
-    move(benches[choice.bench]!.firstFree(start, booked, bench.units), 'bench-busy')
+    next = benches[choice.bench]!.firstFree(start, booked, bench.units)
+    if (next > start) [start, holdup] = [next, 'bench-busy']
     if (person !== null && personOpen) {
-      move(firstInside(personOpen, start, attended), 'person-hours')
+      next = firstInside(personOpen, start, attended)
+      if (next > start) [start, holdup] = [next, 'person-hours']
       if (start + length > limit) return null
-      move(people[person]!.firstFree(start, attended, 1), 'person-busy')
+      next = people[person]!.firstFree(start, attended, 1)
+      if (next > start) [start, holdup] = [next, 'person-busy']
     }
     if (start + length > limit) return null
     if (start === before) return { bench: choice.bench, person, start, end: start + length, holdup }

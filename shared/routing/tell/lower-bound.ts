@@ -9,7 +9,7 @@ import { firstInside } from '../time/first-inside.ts'
 export function lowerBound(layout: Layout): number {
   const { shop, steps, order, benchSites, sampleSites, couriers } = layout
   /** For each step its earliest end at each site where it can be done. */
-  const ends: Map<number, number>[] = steps.map(() => new Map())
+  const ends = steps.map(() => new Map<number, number>())
   const held = new Set(steps.flatMap(({ step, sample }) => (step.state === 'started' ? [sample] : [])))
   const soonest = new Float64Array(steps.length)
   for (const i of order) {
@@ -32,7 +32,7 @@ export function lowerBound(layout: Layout): number {
       const at = step.pin?.start === undefined ? start : start <= step.pin.start ? step.pin.start : Infinity
       if (at + length > shop.horizon) continue
       ends[i]!.set(site, Math.min(ends[i]!.get(site) ?? Infinity, at + length))
-      soonest[i] = Math.min(soonest[i]!, at + length)
+      soonest[i] = Math.min(soonest[i], at + length)
     }
   }
   const finish = shop.jobs.map(() => -Infinity)

@@ -7,9 +7,12 @@ type Line = { from: number; to: number; departures: number[]; minutes: number }
 export class Couriers {
   private readonly lines: Line[] = []
   private readonly count: number
+  /** Arrivals already worked out, by site and time of departure. */
+  private readonly known: Map<number, number[]>[]
 
   constructor(sites: Site[], now: number) {
     this.count = sites.length
+    this.known = sites.map(() => new Map<number, number[]>())
     const index = new Map(sites.map((site, i) => [site.id, i]))
     sites.forEach((site, from) => {
       for (const { to, departures, minutes } of site.courier) {
@@ -24,9 +27,14 @@ export class Couriers {
   /** The earliest time at which what is ready at `from` at `time` can be at `to`; Infinity if no courier goes there. */
   arrival(from: number, to: number, time: number): number {
     if (from === to) return time
-    if (!this.lines.length) return Infinity
-    const rounds = this.rounds(from, time)
-    return rounds[rounds.length - 1]![to]!
+    if (!this.lines.length || time === Infinity) return Infinity
+    const known = this.known[from]!
+    let times = known.get(time)
+    if (!times) {
+      times = this.rounds(from, time).at(-1)!
+      known.set(time, times)
+    }
+    return times[to]!
   }
 
   /** The way with the fewest legs that is there by `by`, the earliest among those; null if there is none. */

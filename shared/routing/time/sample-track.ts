@@ -28,7 +28,8 @@ export class SampleTrack {
   /** Where the sample comes from for what follows the first `count` stays. */
   before(count: number): { site: number; at: number } {
     const stay = this.stays[count - 1]
-    return stay ? { site: stay.site, at: stay.end } : this.origin
+    // A started step may end before the sample is said to be available.
+    return stay ? { site: stay.site, at: Math.max(stay.end, this.origin.at) } : this.origin
   }
 
   /** The same sample as if nothing of it at or after `time` were planned. */

@@ -30,6 +30,9 @@ const FALLEN = 0.9
 const AIM = 0.0005
 const SPAN = 0.0005
 
+/** Strain behind the proof strength in which an upper yield point and the levelling off after it are over. */
+const YIELDS_WITHIN = 0.02
+
 /** Reads a load-extension record once, in linear time. */
 export function analyseCurve({ curve: record, areaMm2, gaugeLengthMm, offsetPercent, elasticWindow }: CurveInput): CurveAnalysis {
   const curve = stressStrain(record, areaMm2, gaugeLengthMm)
@@ -39,16 +42,26 @@ export function analyseCurve({ curve: record, areaMm2, gaugeLengthMm, offsetPerc
   const highest = maximumForce(curve, 0, end.last, end.broke)
   if (!line) return { curve, end, line, proof: null, yielding: null, highest, maximum: highest, fracture: null }
 
-  const rough = offsetCrossing(curve, line, offset, end.last)
+  const rough = offsetCrossing(curve, line, offset, end.lastExtension)
   const middle = rough?.index ?? end.peak
   const noise = Math.hypot(noiseOf(curve.stress, line.from, middle), line.slope * noiseOf(curve.strain, line.from, middle))
   const half = halfWidth(curve.strain, middle, end.last, noise / (AIM * (rough?.stress ?? highest.stress)))
-  const smooth = half > 0 ? { strain: smoothed(curve.strain, half), stress: smoothed(curve.stress, half) } : curve
-  const proof = half > 0 ? offsetCrossing(smooth, line, offset, end.lastExtension) : rough
   const scatter = noiseOf(curve.stress, line.from, Math.min(end.last, 2 * middle)) / Math.sqrt(2 * half + 1)
-  const yielding = yieldPoint({ raw: curve, smooth, half, scatter, line, proof, last: end.lastExtension })
+  const averaged = (to: number) => (half > 0 ? smoothed(curve, half, line.from, to) : curve)
+  // a yield point shows soon after the proof strength; only where there is one the rest is averaged too
+  const soon = strainReaches(curve.strain, (rough?.strain ?? line.zeroStrain) + YIELDS_WITHIN, middle, end.lastExtension)
+  const near = averaged(soon)
+  const proof = half > 0 ? (offsetCrossing(near, line, offset, soon) ?? offsetCrossing(averaged(end.lastExtension), line, offset, end.lastExtension)) : rough
+  const seen = { raw: curve, half, scatter, line, proof }
+  const yielding = yieldPoint({ ...seen, smooth: near, last: soon }) && yieldPoint({ ...seen, smooth: averaged(end.lastExtension), last: end.lastExtension })
   const maximum = yielding ? (yielding.hardeningStrain === null ? null : maximumForce(curve, yielding.after, end.last, end.broke)) : highest
   return { curve, end, line, proof, yielding, highest, maximum, fracture: fractureOf(curve, end, highest) }
+}
+
+function strainReaches(strain: Float64Array, value: number, from: number, last: number): number {
+  let i = from
+  while (i < last && strain[i]! < value) i++
+  return i
 }
 
 function fractureOf({ strain, stress }: StressStrain, { last, lastExtension, broke }: RecordEnd, highest: Maximum): Crossing | null {

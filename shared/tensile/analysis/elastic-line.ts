@@ -1,10 +1,16 @@
 import { fitLine, type LineFit } from './fit-line.ts'
 import { offsetCrossing } from './offset-crossing.ts'
+import { blocks } from './smoothing.ts'
 import { steepestLine } from './steepest-line.ts'
 import type { StressStrain } from './stress-strain.ts'
 
-/** The elastic line with the stresses, MPa, between which it was fitted, and by whom they were chosen. */
-export type ElasticLine = LineFit & { fromMPa: number; toMPa: number; chosen: 'by rule' | 'by hand' }
+/** The elastic line with the stresses, MPa, between which it was fitted, who chose them, and the lines through its lower and upper half. */
+export type ElasticLine = LineFit & { fromMPa: number; toMPa: number; chosen: 'by rule' | 'by hand'; lower: LineFit | null; upper: LineFit | null }
+
+/** Points up to the proof strength that are enough to choose a stretch on; a longer record is averaged down for it. */
+const ENOUGH = 4000
+/** Times that the stretch and the proof strength are found from each other; two or three do. */
+const ROUNDS = 8
 
 /** Stretch of the proof strength over which the line is fitted unless the curve says otherwise. */
 const USUAL: Stretch = { low: 0.1, high: 0.45 }
@@ -28,25 +34,45 @@ export function fitBetween(curve: StressStrain, fromMPa: number, toMPa: number, 
  * spoils its lower part, and down where yielding has begun within it. Null when fewer than three points make a rising line.
  */
 export function elasticLine(curve: StressStrain, peak: number, offset: number, given?: { fromMPa: number; toMPa: number }): ElasticLine | null {
-  if (given) {
-    const fit = fitBetween(curve, given.fromMPa, given.toMPa, peak)
-    return fit && { ...fit, ...given, chosen: 'by hand' }
-  }
-  const first = steepestLine(curve, peak)
+  const stretch = given ?? stretchByRule(curve, peak, offset)
+  if (!stretch) return null
+  const { fromMPa, toMPa } = stretch
+  const line = fitBetween(curve, fromMPa, toMPa, peak)
+  return line && { ...line, fromMPa, toMPa, chosen: given ? 'by hand' : 'by rule', ...halves(curve, { ...line, fromMPa, toMPa }) }
+}
+
+function stretchByRule(record: StressStrain, recordPeak: number, offset: number): { fromMPa: number; toMPa: number } | null {
+  const first = steepestLine(record, recordPeak)
   if (!first) return null
+  const end = offsetCrossing(record, first, offset, recordPeak)?.index ?? recordPeak
+  const size = Math.max(1, Math.floor(end / ENOUGH))
+  // beyond the crossing by a fifth, since a better line may cross later
+  const curve = blocks(record, size, Math.min(recordPeak, Math.ceil(1.2 * end) + 10 * size))
+  const peak = curve.stress.length - 1
   const begins = Math.max(0, lowest(curve.stress, Math.min(peak, 4)))
-  let line: Pick<LineFit, 'slope' | 'zeroStrain' | 'to'> = first
-  let best: ElasticLine | null = null
-  for (let round = 0; round < 8; round++) {
-    const proof = offsetCrossing(curve, line, offset, peak)?.stress ?? curve.stress[peak]!
+  let line: Pick<LineFit, 'slope' | 'zeroStrain' | 'to'> = { ...first, to: Math.min(peak, Math.floor(first.to / size)) }
+  let best: Window | null = null
+  for (let round = 0; round < ROUNDS; round++) {
+    const proof = offsetCrossing(curve, line, offset, peak)?.stress ?? highest(curve.stress)
     const next = bestStretch(curve, proof, begins, peak)
     if (!next) break
-    const settled = best && next.from === best.from && next.to === best.to
-    best = { ...next, chosen: 'by rule' }
+    const isSettled = best !== null && next.from === best.from && next.to === best.to
+    best = next
     line = next
-    if (settled) break
+    if (isSettled) break
   }
   return best
+}
+
+function highest(values: Float64Array): number {
+  let most = -Infinity
+  for (let i = 0; i < values.length; i++) if (values[i]! > most) most = values[i]!
+  return most
+}
+
+function halves(curve: StressStrain, { fromMPa, toMPa, to }: Window): { lower: LineFit | null; upper: LineFit | null } {
+  const middle = (fromMPa + toMPa) / 2
+  return { lower: fitBetween(curve, fromMPa, middle, to), upper: fitBetween(curve, middle, toMPa, Math.min(to + 2, curve.stress.length - 1)) }
 }
 
 function lowest(values: Float64Array, to: number): number {
@@ -97,9 +123,7 @@ function bestStretch(curve: StressStrain, proof: number, begins: number, peak: n
 const FOOT = 0.04
 
 function hasFoot(curve: StressStrain, line: Window): boolean {
-  const middle = (line.fromMPa + line.toMPa) / 2
-  const lower = fitBetween(curve, line.fromMPa, middle, line.to)
-  const upper = fitBetween(curve, middle, line.toMPa, line.to + 2)
+  const { lower, upper } = halves(curve, line)
   if (!lower || !upper) return false
   return upper.slope - lower.slope > Math.max(FOOT * upper.slope, 3 * Math.hypot(lower.slopeDeviation, upper.slopeDeviation))
 }

@@ -10,8 +10,8 @@ export type Maximum = {
   isReached: boolean
 }
 
-/** Readings this close to the maximum, as a share of it, stand on its plateau: below the resolution of any force measurement. */
-const PLATEAU = 1e-5
+/** Readings this close to the maximum, as a share of it, are the same force but for the rounding of a file. */
+const PLATEAU = 1e-7
 /** Share of the maximum that the force has to fall behind it. */
 const FALL = 0.001
 
@@ -21,12 +21,19 @@ const FALL = 0.001
  */
 export function maximumForce({ strain, stress }: StressStrain, from: number, last: number, broke: boolean): Maximum {
   let index = from
-  for (let i = from; i <= last; i++) if (stress[i]! > stress[index]!) index = i
-  const top = stress[index]!
-  let first = index
-  let end = index
-  for (let i = index; i >= from; i--) if (stress[i]! >= top * (1 - PLATEAU)) first = i
-  for (let i = index; i <= last; i++) if (stress[i]! >= top * (1 - PLATEAU)) end = i
+  let top = stress[from]!
+  let first = from
+  let end = from
+  for (let i = from + 1; i <= last; i++) {
+    const here = stress[i]!
+    if (here < top * (1 - PLATEAU)) continue
+    end = i
+    if (here > top * (1 + PLATEAU)) first = i
+    if (here > top) {
+      top = here
+      index = i
+    }
+  }
   return { index, stress: top, strain: (strain[first]! + strain[end]!) / 2, isReached: broke || fallsBehind(stress, index, last) }
 }
 

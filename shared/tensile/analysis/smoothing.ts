@@ -1,3 +1,5 @@
+import type { StressStrain } from './stress-strain.ts'
+
 /** Triplets looked at for the noise: enough for a median that is good to a few percent. */
 const TRIPLETS = 1500
 
@@ -15,21 +17,62 @@ export function noiseOf(values: Float64Array, from: number, to: number): number 
   return sizes[Math.floor(sizes.length / 2)]! / 1.652
 }
 
-/** Moving mean over `2·half + 1` points, shorter at the ends so that it stays centred; the values themselves for `half` 0. Linear in time. */
-export function smoothed(values: Float64Array, half: number): Float64Array {
-  if (half <= 0) return values
-  const count = values.length
-  const result = new Float64Array(count)
-  const base = values[0] ?? 0
-  let low = 0
-  let high = -1
-  let total = 0
-  for (let i = 0; i < count; i++) {
+/**
+ * The curve with each point from `from` to `to` replaced by the mean of the `2·half + 1` points around it, fewer at the ends of the record
+ * so that the mean stays centred; points before `from` are as they were, and the record ends at `to`. Linear in time.
+ */
+export function smoothed({ strain, stress }: StressStrain, half: number, from: number, to: number): StressStrain {
+  const result = { strain: strain.slice(0, to + 1), stress: stress.slice(0, to + 1) }
+  const count = stress.length
+  // sums of differences from one point, so that they keep their digits
+  const origin = { strain: strain[from]!, stress: stress[from]! }
+  let low = from
+  let high = from - 1
+  let strains = 0
+  let stresses = 0
+  for (let i = from; i <= to; i++) {
     const reach = Math.min(half, i, count - 1 - i)
-    while (high < i + reach) total += values[++high]! - base
-    while (low < i - reach) total -= values[low++]! - base
-    while (high > i + reach) total -= values[high--]! - base
-    result[i] = base + total / (2 * reach + 1)
+    while (high < i + reach) {
+      high++
+      strains += strain[high]! - origin.strain
+      stresses += stress[high]! - origin.stress
+    }
+    while (low > i - reach) {
+      low--
+      strains += strain[low]! - origin.strain
+      stresses += stress[low]! - origin.stress
+    }
+    while (low < i - reach) {
+      strains -= strain[low]! - origin.strain
+      stresses -= stress[low]! - origin.stress
+      low++
+    }
+    while (high > i + reach) {
+      strains -= strain[high]! - origin.strain
+      stresses -= stress[high]! - origin.stress
+      high--
+    }
+    const points = high - low + 1
+    result.strain[i] = origin.strain + strains / points
+    result.stress[i] = origin.stress + stresses / points
+  }
+  return result
+}
+
+/** Means of `size` points each, of the record up to `last`: a shorter record of the same course, for choosing on. The same for size 1. */
+export function blocks({ strain, stress }: StressStrain, size: number, last: number): StressStrain {
+  if (size <= 1) return { strain: strain.subarray(0, last + 1), stress: stress.subarray(0, last + 1) }
+  const count = Math.floor((last + 1) / size)
+  const result = { strain: new Float64Array(count), stress: new Float64Array(count) }
+  for (let k = 0; k < count; k++) {
+    let strains = 0
+    let stresses = 0
+    for (let i = k * size; i < (k + 1) * size; i++) {
+      strains += strain[i]!
+      stresses += stress[i]!
+    }
+    result.strain[k] = strains / size
+    result.stress[k] = stresses / size
   }
   return result
 }

@@ -46,21 +46,23 @@ export function supervise({ name, title, launch, hint, stopSignal = 'SIGTERM', p
   async function keepRunning() {
     let delay = FIRST_DELAY_MS
     let since = Date.now()
+    let fault = null
     for (;;) {
-      if (!hasEnded(child)) await once(child, 'exit')
+      if (child.pid && !hasEnded(child)) await once(child, 'exit')
       if (stopping.signal.aborted) return
       await endRemains()
       if (Date.now() - since > STEADY_MS) delay = FIRST_DELAY_MS
-      say(`${title} ended (${howItEnded(child)}); starting it again in ${delay / 1000} s`)
+      say(`${fault ?? `${title} ended (${howItEnded(child)})`}; starting it again in ${delay / 1000} s`)
       await sleep(delay, undefined, { signal: stopping.signal }).catch(() => {})
       if (stopping.signal.aborted) return
       delay = Math.min(delay * 2, LONGEST_DELAY_MS)
       since = Date.now()
       try {
         await launch(onSpawn)
+        fault = null
         if (!stopping.signal.aborted) say(`${title} runs again`)
       } catch (error) {
-        if (!stopping.signal.aborted) say(explain(error))
+        fault = explain(error).split('\n')[0]
       }
     }
   }

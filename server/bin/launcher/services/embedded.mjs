@@ -6,8 +6,8 @@ import { recall, remember } from '../data/remembered.mjs'
 import { secret } from '../data/secrets.mjs'
 import { supervise } from '../processes/supervise.mjs'
 import { makeCluster } from './make-cluster.mjs'
-import { hasCluster, programsFor, startPostgres } from './postgres.mjs'
-import { redisUrl, startRedis } from './redis.mjs'
+import { endPostgresIn, hasCluster, programsFor, startPostgres } from './postgres.mjs'
+import { endRedisIn, redisUrl, startRedis } from './redis.mjs'
 import { APP, databaseUrl, ensureRoles, OWNER, SUPERUSER } from './roles.mjs'
 import { serverFolders } from './server-folders.mjs'
 
@@ -19,6 +19,12 @@ export function embeddedFolders() {
   const id = recall('id') ?? randomUUID()
   remember('id', id)
   return serverFolders(dataFolder, path.join('/var/lib', `crosshead-${id}`))
+}
+
+/** Ends servers that outlived a killed launcher, so that their ports are free again. */
+export async function endEmbedded(folders) {
+  await endPostgresIn(folders.postgres)
+  await endRedisIn(folders.redis)
 }
 
 /** The private PostgreSQL: made when it is not there, kept running, with its roles and its database. */

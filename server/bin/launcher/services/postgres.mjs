@@ -35,7 +35,7 @@ function postmasterOf(folder) {
  * removes its pid file. A pid alone proves nothing (reused, or a zombie that PostgreSQL would take for alive): what counts is which live
  * process has this folder as its working directory.
  */
-export async function endLeftovers(folder) {
+export async function endPostgresIn(folder) {
   const leftovers = processesIn(folder, 'postgres')
   const pid = postmasterOf(folder)?.pid
   if (leftovers.includes(pid)) await endProcesses([pid], 'SIGINT', 20_000)
@@ -47,7 +47,7 @@ export async function endLeftovers(folder) {
 /** Starts the cluster on loopback, without a socket file, and comes back when it takes connections. */
 export async function startPostgres(bin, folders, { port, log, settings = [], onSpawn = () => {} }) {
   const folder = folders.postgres
-  await endLeftovers(folder)
+  await endPostgresIn(folder)
   const all = [`port=${port}`, 'listen_addresses=127.0.0.1', 'unix_socket_directories=', 'max_connections=100', 'timezone=UTC', 'log_timezone=UTC', ...settings]
   const output = openLog(log)
   const child = spawnGuarded(path.join(bin, 'postgres'), ['-D', folder, ...all.flatMap((setting) => ['-c', setting])], {
@@ -65,5 +65,5 @@ export async function startPostgres(bin, folders, { port, log, settings = [], on
     await sleep(10)
   }
   if (child.pid && isAlive(child.pid)) signal(child.pid, 'SIGQUIT')
-  throw new Failure(`PostgreSQL did not start${startFault ? `: ${startFault}` : ''}. The end of ${log}:\n${endOfLog(log)}`)
+  throw new Failure(`PostgreSQL did not start${startFault ? ` (${startFault})` : ''}, see ${log}\n\n${endOfLog(log)}`)
 }

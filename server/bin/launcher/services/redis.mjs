@@ -32,10 +32,13 @@ function answers(port, password) {
   })
 }
 
+/** Ends a Redis that outlived its launcher. */
+export const endRedisIn = (folder) => endProcesses(processesIn(folder, 'redis-server'), 'SIGTERM', 10_000)
+
 /** Starts Redis on loopback with a password and comes back when it answers. `keep`: write every change to disk. */
 export async function startRedis(folders, { port, password, log, keep = true, onSpawn = () => {} }) {
   const folder = ownedFolder(folders.redis, folders.account)
-  await endProcesses(processesIn(folder, 'redis-server'), 'SIGTERM', 10_000) // one that outlived its launcher
+  await endRedisIn(folder)
   // In a file, since a command line can be read by everyone on the machine.
   const configuration = path.join(folder, 'redis.conf')
   const lines = [
@@ -57,5 +60,5 @@ export async function startRedis(folders, { port, password, log, keep = true, on
     await sleep(10)
   }
   if (child.pid && isAlive(child.pid)) signal(child.pid, 'SIGKILL')
-  throw new Failure(`Redis did not start${startFault ? `: ${startFault}` : ''}. The end of ${log}:\n${endOfLog(log)}`)
+  throw new Failure(`Redis did not start${startFault ? ` (${startFault})` : ''}, see ${log}\n\n${endOfLog(log)}`)
 }

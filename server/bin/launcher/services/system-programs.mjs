@@ -3,7 +3,7 @@ import fs from 'node:fs'
 import path from 'node:path'
 import { Failure } from '../failure.mjs'
 import { freshLog } from '../data/logs.mjs'
-import { run } from '../processes/run.mjs'
+import { lastLines, run } from '../processes/run.mjs'
 
 const OLDEST_POSTGRES = 15
 
@@ -59,8 +59,11 @@ export async function ensurePrograms(names) {
   const log = freshLog('apt')
   const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive', LC_ALL: 'C.UTF-8' }
   const lockWait = ['-o', 'DPkg::Lock::Timeout=300']
-  await run('apt-get', [...lockWait, 'update'], { env, log, mayFail: true }) // old lists may still do
-  await run('apt-get', [...lockWait, 'install', '-y', '--no-install-recommends', ...wanted], { env, log })
+  const update = await run('apt-get', [...lockWait, 'update'], { env, log, mayFail: true }) // old lists may still do
+  const install = await run('apt-get', [...lockWait, 'install', '-y', '--no-install-recommends', ...wanted], { env, log, mayFail: true })
+  if (install.status !== 0) {
+    throw new Failure(`apt-get could not install ${wanted.join(' and ')}, see ${log}\n\n${lastLines(update.stderr, 6)}\n${lastLines(install.stderr, 10)}`)
+  }
   const still = missing(wanted)
   if (still.length > 0) throw new Failure(`Debian's ${still.join(' and ')} is installed, yet ${still.map((name) => programs[name].title).join(', ')} is not found.`)
   return `installed ${wanted.join(', ')}`

@@ -3,7 +3,8 @@ create table company (
   id uuid primary key, name text not null, address text not null, email text not null, tax_percent integer not null, created_at timestamptz not null
 );
 create table sites (
-  id uuid primary key, name text not null unique, address text not null, time_zone text not null, created_at timestamptz not null
+  id uuid primary key, name text not null unique, address text not null, time_zone text not null, created_at timestamptz not null,
+  hours jsonb not null default '[{"weekday":1,"from":"07:30","to":"17:00"},{"weekday":2,"from":"07:30","to":"17:00"},{"weekday":3,"from":"07:30","to":"17:00"},{"weekday":4,"from":"07:30","to":"17:00"},{"weekday":5,"from":"07:30","to":"17:00"}]'
 );
 create table customers (
   id uuid primary key, name text not null unique, address text not null, report_email text not null, currency text not null, created_at timestamptz not null

@@ -69,7 +69,7 @@ export function NumberField({ label, aside, hint, error, cures, labelHidden, cla
               if (!reading?.problem) setTyped(undefined)
               onBlur?.(event)
             }}
-            className={classNames('text-right', unit && 'pr-1.5!', look === 'raw' && 'text-left! font-mono text-26 font-medium tracking-tight')}
+            className={classNames('text-right', unit != null && 'pr-1.5!', look === 'raw' && 'text-left! font-mono text-26 font-medium tracking-tight')}
           />
           {unit && <span className="unit pr-2.5 text-13 whitespace-nowrap" aria-hidden>{unit}</span>}
         </span>

@@ -33,7 +33,7 @@ export function ScanField({ onScan, onSearch, label = 'Scan a label or search', 
   }
   return (
     <label className={classNames('scan', folds && 'scan-folds', className)}>
-      <Icon name="scan" />
+      <Icon name="scan" className={folds ? 'max-tablet:size-5! max-tablet:text-ink' : undefined} />
       <span className="sr-only">{label}</span>
       <input
         ref={input}
@@ -58,7 +58,7 @@ export function ScanField({ onScan, onSearch, label = 'Scan a label or search', 
           }
         }}
       />
-      {busy ? <span className="busy-ring" role="status" aria-label="Looking it up" /> : <Kbd>/</Kbd>}
+      {busy ? <span className="busy-ring" role="status" aria-label="Looking it up" /> : <span aria-hidden className={folds ? 'max-tablet:hidden' : undefined}><Kbd>/</Kbd></span>}
     </label>
   )
 }

@@ -25,7 +25,7 @@ export function Tick({ label, labelHidden, mixed = false, hint, error, className
     <div className={classNames('min-w-0', className)}>
       <label className="tick">
         <input type="checkbox" {...input} ref={set} aria-invalid={error ? true : undefined} />
-        <i aria-hidden><Icon name="check" /></i>
+        <i aria-hidden><Icon name="check" className="size-3.5!" /></i>
         <span className={labelHidden ? 'sr-only' : undefined}>
           {label}
           {hint && <span className="block text-13 text-quiet">{hint}</span>}
