@@ -1,9 +1,6 @@
 import { resolve } from 'node:path'
 import express, { Router, type Express } from 'express'
 import { Problem } from '../shared/problems.ts'
-import { changeRoutes } from './routes/changes.ts'
-import { peopleRoutes } from './routes/people.ts'
-import { checkPassword, sessionRoutes } from './routes/sessions.ts'
 import { ChangesHub } from './http/changes-hub.ts'
 import { serveClient } from './http/client-files.ts'
 import { healthz } from './http/healthz.ts'
@@ -18,9 +15,21 @@ import { keepSessions } from './http/session/keep-sessions.ts'
 import { preparePassport } from './http/session/passport.ts'
 import { SessionStore } from './http/session/session-store.ts'
 import { outside } from './integrations/outside.ts'
+import { benchRoutes } from './routes/benches.ts'
+import { changeRoutes } from './routes/changes.ts'
+import { evaluationRoutes } from './routes/evaluations.ts'
+import { fileRoutes } from './routes/files.ts'
+import { jobRoutes } from './routes/jobs.ts'
+import { paymentNoticeRoute, paymentRoutes } from './routes/payments.ts'
+import { peopleRoutes } from './routes/people.ts'
+import { sampleRoutes } from './routes/samples.ts'
+import { checkPassword, sessionRoutes } from './routes/sessions.ts'
+import { testRunRoutes } from './routes/test-runs.ts'
 
 /** A process that stops ends the streams first, lets other requests finish, then closes what the app keeps open. */
 export type App = Express & { endStreams(): void; close(): Promise<void> }
+
+const operations = [sessionRoutes, peopleRoutes, evaluationRoutes, jobRoutes, paymentRoutes, sampleRoutes, benchRoutes, testRunRoutes, fileRoutes]
 
 /** The whole HTTP side of the product. Needs `setOutside` before. */
 export function createApp(): App {
@@ -41,13 +50,13 @@ export function createApp(): App {
     res.set('Cache-Control', 'no-store')
     next()
   })
-  // Notices of payments carry no session and are checked by their signature over the raw body, so they come before both.
+  // Notices of payments have no session and no page of ours: what counts is the signature over the body as it came.
   api.use('/payments/notices', express.raw({ type: () => true, limit: '1mb' }))
+  paymentNoticeRoute(api)
   api.use(keepSessions({ store, passport: preparePassport(checkPassword), secret: settings.SESSION_SECRET }))
   api.use(ownPagesOnly(settings.BASE_URL), holdBackPerson, readJson)
   api.use(['/links', '/report-checks'], holdBackAddress('codes'))
-  sessionRoutes(api)
-  peopleRoutes(api)
+  for (const bind of operations) bind(api)
   changeRoutes(api, hub)
   api.use((_req, _res, next) => next(new Problem('not-found', 'there is no such address')))
   app.use('/api', api)

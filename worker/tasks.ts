@@ -1,4 +1,5 @@
 import type { Task } from './task.ts'
+import { planWork } from './tasks/plan-work.ts'
 
 /** Every task. Nothing is found by scanning folders. */
-export const tasks: readonly Task[] = []
+export const tasks: readonly Task[] = [planWork, ]

@@ -1,5 +1,5 @@
 // npm test: all checks on throwaway services. With --check: the same without the browser's.
-import { commandCheck } from './launcher/checks/check-command.mjs'
+import { commandCheck } from './launcher/checks/command-check.mjs'
 import { vitestCheck } from './launcher/checks/vitest-check.mjs'
 import { explain } from './launcher/failure.mjs'
 import { checkNodeVersion } from './launcher/node-version.mjs'

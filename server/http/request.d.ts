@@ -9,6 +9,8 @@ declare global {
     /** What a session says of the signed-in person; the rest is read afresh. */
     interface User {
       id: string
+      /** Of the person at sign-in; a session of another epoch is over. */
+      epoch: number
     }
   }
 }

@@ -1,9 +1,8 @@
 import * as z from 'zod'
 import { defineTool } from '../method/define-tool.ts'
-import { round } from '../units/round.ts'
-import { conversionScales, type ConversionScale } from './conversion/conversion-scale.ts'
-import { readTable, type ConversionTable } from './conversion/conversion-table.ts'
-import { conversionTableNames, conversionTables } from './conversion/conversion-tables.ts'
+import { conversionScales } from './conversion/conversion-scale.ts'
+import { conversionTableNames } from './conversion/conversion-tables.ts'
+import { convertByTable, scaleSaid } from './conversion/convert-by-table.ts'
 
 /**
  * Converts a measured hardness by a published table. Every answer is approximate; it holds for the table's material only, is never
@@ -23,25 +22,10 @@ export const convertHardness = defineTool({
   }),
   run: ({ table, from, to }) => ({
     values: to.map((scale) => {
-      const { value, informative, reported } = convert(conversionTables[table], table, from, scale)
-      return { scale, value, reported, informative }
+      const converted = convertByTable(table, from, scale)
+      if (!converted) throw new RangeError(`${table} has no ${scaleSaid(scale)} for ${from.value} ${scaleSaid(from.scale)}`)
+      return converted
     }),
     approximate: true,
   }),
 })
-
-function convert(tables: readonly ConversionTable[], name: string, from: { scale: ConversionScale; value: number }, to: ConversionScale) {
-  for (const table of tables) {
-    const reading = readTable(table, from.scale, from.value, to)
-    if (reading) return { ...reading, reported: converted(reading.value, to, table) }
-  }
-  throw new RangeError(`${name} has no ${said(to)} for ${from.value} ${said(from.scale)}`)
-}
-
-function converted(value: number, scale: ConversionScale, { reporting }: ConversionTable): string {
-  return `${round(value, reporting === 'tenths' && scale.startsWith('HR') ? '0.1' : '1')} ${said(scale)}`
-}
-
-function said(scale: ConversionScale): string {
-  return scale === 'tensileStrengthMPa' ? 'MPa' : scale
-}

@@ -7,6 +7,7 @@ import { standardDeviation } from '../statistics/standard-deviation.ts'
 import { cylinderCorrection } from './rockwell/cylinder-correction.ts'
 import { hardnessResultNames, hardnessResults } from './hardness-results.ts'
 import { rockwellChecks } from './rockwell/rockwell-checks.ts'
+import { rockwellConversions } from './rockwell/rockwell-conversions.ts'
 import { rockwellMisfits } from './rockwell/rockwell-fit.ts'
 import { RockwellParameters, RockwellReadings } from './rockwell/rockwell-input.ts'
 import { rockwellRules, rockwellStandards } from './rockwell/rockwell-rules.ts'
@@ -59,6 +60,7 @@ export const rockwell = defineMethod({
       checks: rockwellChecks(parameters, readings, values),
     }
   },
+  conversions: ({ parameters, results }) => rockwellConversions(parameters, results),
   report: ({ parameters: { standard, scale, surface, thicknessMm }, readings }) => {
     const { indenter, ballDiameterMm, totalForceKgf } = rockwellScale[scale]
     const tool = indenter === 'cone' ? 'diamond cone' : `tungsten carbide ball, ${ballDiameterMm} mm`

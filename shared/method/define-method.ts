@@ -1,6 +1,7 @@
 import * as z from 'zod'
 import type { Check, Method, Misfit, Result, ResultName, StepNeed, UncertaintyComponent } from './method.ts'
 import { orderedParameters } from './ordered-parameters.ts'
+import type { Conversion, Picture } from './picture.ts'
 import type { Piece } from './piece.ts'
 import { Uncertainty } from './uncertainty.ts'
 
@@ -23,6 +24,8 @@ export type MethodDefinition<P, R, M extends keyof P & string> =
     /** Throws RangeError where a table has no answer. `uncertainty` holds what is known besides the spread of the readings. */
     evaluate(input: { parameters: P; readings: R; uncertainty?: { components: UncertaintyComponent[] } }): { results: Result[]; checks: Check[] }
     report(input: { parameters: P; readings: R; results: Result[] }): string[]
+    pictures?(input: { parameters: P; readings: R }): Picture[]
+    conversions?(input: { parameters: P; results: Result[] }): Conversion[]
   }
 
 /**
@@ -47,5 +50,7 @@ export function defineMethod<P, R, const M extends keyof P & string = never>(def
     evaluate: (raw) => definition.evaluate(input.parse(raw)),
     report: ({ parameters: rawParameters, readings: rawReadings, results }) =>
       definition.report({ parameters: parameters.parse(rawParameters), readings: readings.parse(rawReadings), results }),
+    ...(definition.pictures && { pictures: (raw: { parameters: unknown; readings: unknown }) => definition.pictures?.({ parameters: parameters.parse(raw.parameters), readings: readings.parse(raw.readings) }) ?? [] }),
+    ...(definition.conversions && { conversions: (raw: { parameters: unknown; results: Result[] }) => definition.conversions?.({ parameters: parameters.parse(raw.parameters), results: raw.results }) ?? [] }),
   }
 }

@@ -19,6 +19,8 @@ type Input = { parameters: TensileParameters; readings: TensileReadings; uncerta
 export function analysisOf(parameters: TensileParameters, readings: TensileReadings): CurveAnalysis | null {
   const gaugeLengthMm = parameters.extensometerGaugeLengthMm ?? parameters.originalGaugeLengthMm
   if (!readings.curve || gaugeLengthMm === undefined) return null
+  // a record that never pulls says nothing
+  if (!(extremes(readings.curve.forceN).maximum > 0)) return null
   const { offsetPercent, elasticWindow } = parameters
   return analyseCurve({ curve: readings.curve, areaMm2: sectionArea(parameters.section).value, gaugeLengthMm, offsetPercent, elasticWindow })
 }
@@ -50,7 +52,7 @@ export function evaluateTensile({ parameters, readings, uncertainty }: Input): {
   const results = found.flatMap((one) => (one ? [resultOf(one, parameters.standard)] : [])).map((one) => (one.key === 'tensileStrength' ? withUncertainty(one, uncertainty) : one))
   const fromCurve = stretch?.quantity === 'elongationByExtensometer'
   const checks = [
-    ...(readings.curve || readings.maximumForceN !== undefined ? [] : [noForce]),
+    ...(strength || analysis?.yielding ? [] : [noForce]),
     ...sectionChecks(parameters, readings, areaMm2),
     ...gaugeLengthChecks(parameters, readings, areaMm2, fromCurve),
     ...(analysis ? curveChecks(analysis, parameters, readings, areaMm2) : []),
@@ -58,7 +60,7 @@ export function evaluateTensile({ parameters, readings, uncertainty }: Input): {
   return { results, checks }
 }
 
-const noForce: Check = { code: 'no-force', severity: 'error', message: 'neither a record nor a maximum force: no tensile strength' }
+const noForce: Check = { code: 'no-force', severity: 'error', message: 'neither a record that pulls nor a maximum force: no tensile strength' }
 
 /** Without a gauge length the record still knows its highest force. */
 function highestForce({ curve }: TensileReadings, analysis: CurveAnalysis | null): number | undefined {

@@ -9,7 +9,7 @@ import { eventsOf } from '../support/events.ts'
 
 const app = await startTestApp()
 
-const cookieOf = (answer: { headers: Record<string, unknown> }): string => String((answer.headers['set-cookie'] as unknown as string[] | undefined)?.[0] ?? '')
+const cookieOf = (answer: { headers: Record<string, string> }): string => [answer.headers['set-cookie'] ?? ''].flat()[0] ?? ''
 const valueOf = (cookie: string): string => /^crosshead=([^;]*)/.exec(cookie)?.[1] ?? ''
 /** A signed-in browser and a copy of its cookie. */
 async function signedIn(person: { email: string }) {

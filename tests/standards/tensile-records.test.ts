@@ -7,7 +7,7 @@ const valueOf = (results: { key: string; value: number }[], key: string) => resu
 // Fraunhofer IWM / Leibniz-IWT, 42CrMoS4 round bars, CC BY 4.0: see records/README.md. Tolerances of expected.json.
 describe('42CrMoS4, measured and published', () => {
   const { specimens } = JSON.parse(recordText('42CrMoS4/expected.json'))
-  it.each(specimens.map((one: { specimen: string }) => [one.specimen, one]))('%s', (name, one) => {
+  it.each(specimens.map((one: { specimen: string }) => ({ name: one.specimen, one })) as { name: string; one: any }[])('$name', ({ name: name, one }) => {
     const { published, tolerance, iso6892_rounded_from_published: rounded } = one
     const finalDiameter = Math.sqrt((4 * one.Su_mm2) / Math.PI)
     const parameters = { standard: 'ISO 6892-1', section: { shape: 'round', diametersMm: [one.d0_mm] }, originalGaugeLengthMm: one.L0_mm, extensometerGaugeLengthMm: one.Le_mm }
@@ -31,7 +31,7 @@ describe('42CrMoS4, measured and published', () => {
 // a-hilhorst/Tensile-test-Analysis, MIT licence. No published evaluation: the expected values are an independent computation.
 describe('austenitic sheet, measured', () => {
   const { specimens } = JSON.parse(recordText('stainless/expected.json'))
-  it.each(specimens.map((one: { file: string }) => [one.file, one]))('%s', (file, one) => {
+  it.each(specimens.map((one: { file: string }) => ({ name: one.file, one })) as { name: string; one: any }[])('$name', ({ name: file, one }) => {
     const { from_thinned_file: expected, tolerance } = one
     const parameters = { standard: 'ISO 6892-1', section: { shape: 'area', areaMm2: one.S0_mm2 }, extensometerGaugeLengthMm: one.Le_mm }
     const { results } = tensile.evaluate({ parameters, readings: { curve: curveOf(`stainless/${file}`, one.S0_mm2, one.Le_mm), finalThicknessMm: one.Su_mm2, finalWidthMm: 1 } })

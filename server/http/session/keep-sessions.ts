@@ -1,6 +1,7 @@
 import type { RequestHandler } from 'express'
 import session from 'express-session'
 import type { PassportStatic } from 'passport'
+import { handlerOf } from './passport.ts'
 import { sessionCookie } from './session-cookie.ts'
 import type { SessionStore } from './session-store.ts'
 import { absoluteMs } from './session-times.ts'
@@ -16,6 +17,6 @@ export function keepSessions({ store, passport, secret }: { store: SessionStore;
       if (startedAt !== undefined && Date.now() - startedAt >= absoluteMs) return req.session.regenerate(next)
       next()
     },
-    passport.session(),
+    handlerOf(passport.session()),
   ]
 }

@@ -1,4 +1,4 @@
-import type { Request, Response } from 'express'
+import type { Request, RequestHandler, Response } from 'express'
 import passport from 'passport'
 import { Strategy } from 'passport-local'
 import { Problem } from '../../../shared/problems.ts'
@@ -6,14 +6,6 @@ import { readCaller } from './read-caller.ts'
 
 /** Checks an e-mail address and password; gives the person's id, or refuses by throwing. */
 type CheckPassword = (email: string, password: string, req: Request) => Promise<{ id: string; epoch: number }>
-
-declare global {
-  namespace Express {
-    interface User {
-      epoch: number
-    }
-  }
-}
 
 /** Teaches Passport how people sign in and how a session becomes the caller of a request. */
 export function preparePassport(checkPassword: CheckPassword): typeof passport {
@@ -34,11 +26,17 @@ export function preparePassport(checkPassword: CheckPassword): typeof passport {
 export function authenticate(req: Request, res: Response): Promise<Express.User> {
   return new Promise((resolve, reject) => {
     const answer = (error: unknown, user?: Express.User | false) => {
-      if (error) reject(error instanceof Error ? error : new Error(String(error)))
-      else if (user) resolve(user)
-      else reject(new Problem('wrong-sign-in', 'give an e-mail address and a password'))
+      if (user) resolve(user)
+      else reject(error instanceof Error ? error : new Problem('wrong-sign-in', 'give an e-mail address and a password'))
     }
-    const handler: unknown = passport.authenticate('local', { session: false }, answer)
-    if (typeof handler === 'function') handler(req, res, (error: unknown) => answer(error))
+    void handlerOf(passport.authenticate('local', { session: false }, answer))(req, res, answer)
   })
 }
+
+/** Passport's types say nothing of what its middleware is. */
+export function handlerOf(middleware: unknown): RequestHandler {
+  if (!isHandler(middleware)) throw new TypeError('Passport gave no middleware')
+  return middleware
+}
+
+const isHandler = (value: unknown): value is RequestHandler => typeof value === 'function'

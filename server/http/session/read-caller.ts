@@ -19,6 +19,6 @@ const sql = `
 export async function readCaller(personId: string, epoch: number | undefined, requestId: string): Promise<Caller | null> {
   const [found] = await database.query<Found & { role: Role }>(sql, { bind: [personId], type: QueryTypes.SELECT })
   if (!found || found.epoch !== epoch) return null
-  const { epoch: _, ...person } = found
-  return { person, ability: abilityFor(person), requestId }
+  const { id, name, email, role, customerId, siteIds } = found
+  return { person: { id, name, email, role, customerId, siteIds }, ability: abilityFor(found), requestId }
 }

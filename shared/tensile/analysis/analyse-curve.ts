@@ -54,8 +54,15 @@ export function analyseCurve({ curve: record, areaMm2, gaugeLengthMm, offsetPerc
   const proof = half > 0 ? (offsetCrossing(near, line, offset, soon) ?? offsetCrossing(averaged(end.lastExtension), line, offset, end.lastExtension)) : rough
   const seen = { raw: curve, half, scatter, line, proof }
   const yielding = yieldPoint({ ...seen, smooth: near, last: soon }) && yieldPoint({ ...seen, smooth: averaged(end.lastExtension), last: end.lastExtension })
-  const maximum = yielding ? (yielding.hardeningStrain === null ? null : maximumForce(curve, yielding.after, end.last, end.broke)) : highest
-  return { curve, end, line, proof, yielding, highest, maximum, fracture: fractureOf(curve, end, highest) }
+  const fracture = fractureOf(curve, end, highest)
+  return { curve, end, line, proof, yielding, highest, maximum: yielding ? afterYielding(curve, end, yielding, fracture !== null) : highest, fracture }
+}
+
+/** The maximum after the start of hardening. While it lies below the upper yield point it may be a swing of the plateau, unless the record goes on to fracture. */
+function afterYielding(curve: StressStrain, { last, broke }: RecordEnd, { upper, hardeningStrain, after }: YieldPoint, toFracture: boolean): Maximum | null {
+  if (hardeningStrain === null) return null
+  const maximum = maximumForce(curve, after, last, broke)
+  return { ...maximum, isReached: maximum.isReached && (toFracture || maximum.stress > upper.stress) }
 }
 
 function strainReaches(strain: Float64Array, value: number, from: number, last: number): number {
@@ -75,6 +82,6 @@ function halfWidth(strain: Float64Array, index: number, last: number, noiseOverA
   const wanted = Math.ceil((noiseOverAim ** 2 - 1) / 2)
   if (wanted <= 0) return 0
   let half = 0
-  while (half < wanted && index - half > 0 && index + half < last && strain[index + half]! - strain[index - half]! < SPAN) half++
+  while (half < wanted && index - half > 0 && index + half < last && strain[index + half + 1]! - strain[index - half - 1]! < SPAN) half++
   return half
 }

@@ -1,6 +1,6 @@
 import { fitLine, type LineFit } from './fit-line.ts'
 import { offsetCrossing } from './offset-crossing.ts'
-import { blocks } from './smoothing.ts'
+import { blocks, noiseOf } from './smoothing.ts'
 import { steepestLine } from './steepest-line.ts'
 import type { StressStrain } from './stress-strain.ts'
 
@@ -37,8 +37,28 @@ export function elasticLine(curve: StressStrain, peak: number, offset: number, g
   const stretch = given ?? stretchByRule(curve, peak, offset)
   if (!stretch) return null
   const { fromMPa, toMPa } = stretch
-  const line = fitBetween(curve, fromMPa, toMPa, peak)
-  return line && { ...line, fromMPa, toMPa, chosen: given ? 'by hand' : 'by rule', ...halves(curve, { ...line, fromMPa, toMPa }) }
+  const single = fitBetween(curve, fromMPa, toMPa, peak)
+  if (!single) return null
+  const line = { ...withoutFlattening(curve, single), fromMPa, toMPa }
+  return { ...line, chosen: given ? 'by hand' : 'by rule', ...halves(curve, line) }
+}
+
+/** Share by which noise in the strain may flatten the line, and groups that are enough for one. */
+const FLATTENED = 0.002
+const GROUPS = 40
+
+/**
+ * Noise in the strain flattens a least squares line by the share that its variance has in that of the strain. Where that shows and points
+ * abound, the line goes through means of groups of points instead.
+ */
+function withoutFlattening(curve: StressStrain, line: LineFit): LineFit {
+  const { from, to, points } = line
+  const size = Math.floor(points / GROUPS)
+  const spread = (curve.strain[to]! - curve.strain[from]!) ** 2 / 12
+  if (size < 2 || noiseOf(curve.strain, from, to) ** 2 < FLATTENED * spread) return line
+  const grouped = blocks({ strain: curve.strain.subarray(from, to + 1), stress: curve.stress.subarray(from, to + 1) }, size, points - 1)
+  const fit = fitLine(grouped, 0, grouped.stress.length - 1)
+  return fit ? { ...fit, from, to, points } : line
 }
 
 function stretchByRule(record: StressStrain, recordPeak: number, offset: number): { fromMPa: number; toMPa: number } | null {

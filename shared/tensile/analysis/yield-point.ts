@@ -1,6 +1,7 @@
 import type { Crossing } from './offset-crossing.ts'
 import type { StressStrain } from './stress-strain.ts'
 import { fitLine, type LineFit } from './fit-line.ts'
+import { smoothed } from './smoothing.ts'
 
 /** Discontinuous yielding. Stresses in MPa, strains as fractions. */
 export type YieldPoint = {
@@ -36,10 +37,22 @@ type Input = {
 export function yieldPoint(input: Input): YieldPoint | null {
   const top = upperYield(input)
   if (!top) return null
-  const { raw, smooth, half } = input
-  let upper = top.peak
-  for (let i = Math.max(0, top.peak - half); i <= Math.min(input.last, top.peak + half); i++) if (raw.stress[i]! > raw.stress[upper]!) upper = i
-  return { upper: point(raw, upper), ...yielding({ ...input, peak: top.peak, dropped: top.dropped }, smooth) }
+  const { smooth, last } = input
+  return { upper: upperPoint(input, top.peak), ...yielding({ ...input, last, peak: top.peak, dropped: top.dropped }, smooth) }
+}
+
+/** The peak itself: averaged over no more strain than leaves its tip standing, so over nothing in a record of ordinary density. */
+const TIP = 5e-6
+
+function upperPoint({ raw, half, last }: Input, peak: number): Crossing {
+  const low = Math.max(0, peak - half)
+  const high = Math.min(last, peak + half)
+  let reach = 0
+  while (reach < half && peak - reach > 0 && peak + reach < last && raw.strain[peak + reach + 1]! - raw.strain[peak - reach - 1]! < 2 * TIP) reach++
+  const near = reach > 0 ? smoothed(raw, reach, low, high) : raw
+  let upper = peak
+  for (let i = low; i <= high; i++) if (near.stress[i]! > near.stress[upper]!) upper = i
+  return point(near, upper)
 }
 
 function point({ strain, stress }: StressStrain, index: number): Crossing {
@@ -101,9 +114,9 @@ function yielding({ last, scatter, peak, dropped }: Input & { peak: number; drop
   for (let i = near; i <= far; i++) swing = Math.max(swing, Math.abs(stress[i]! - level))
   const gain = stress[later]! - level
   const from = lastAtMost(stress, level + Math.max(0.03 * gain, Math.min(1.5 * swing, 0.3 * gain)), later, peak)
-  let to = from + 1
+  let to = Math.min(from + 1, later)
   while (to < later && stress[to]! < level + Math.max(0.15 * gain, Math.min(1.5 * swing, 0.3 * gain) + 0.12 * gain)) to++
-  const hardens = fitLine({ strain, stress }, Math.min(from, to - 2), to)
+  const hardens = fitLine({ strain, stress }, Math.max(peak, Math.min(from, to - 2)), to)
   const begins = hardens ? (level - hardens.intercept) / hardens.slope : strain[leaves]!
   const hardeningStrain = Math.min(Math.max(begins, strain[peak]!), strain[to]!)
   leaves = Math.max(dropped, Math.min(leaves, from))
@@ -152,11 +165,12 @@ function levelOf(stress: Float64Array, from: number, to: number): number {
  */
 function lowest(curve: StressStrain, peak: number, end: number, level: number, scatter: number): Crossing {
   const { strain, stress } = curve
-  const band = Math.max(1e-4 * level, 2 * scatter)
+  const band = Math.max(1e-4 * level, 6 * scatter)
   let under = peak
   while (under < end && stress[under]! >= level - band) under++
   let back = under
-  while (back < end && stress[back]! < level - band) back++
+  // noise must not end the undershoot as soon as it begins
+  while (back < end && stress[back]! < level - 0.25 * band) back++
   let start = back
   if (under >= end) {
     // no undershoot: from where the stress has come down to the plateau

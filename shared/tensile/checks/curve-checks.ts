@@ -17,6 +17,9 @@ export function curveChecks(analysis: CurveAnalysis, parameters: TensileParamete
     if (!maximum || maximum.stress < yielding.upper.stress) warn('maximum-at-upper-yield', atUpperYield(analysis, parameters))
   }
   const reached = maximum ?? highest
+  if (standsAlone(analysis, highest.index)) {
+    warn('force-spike', `the highest force is a single reading far above its neighbours, ${significant(highest.stress, 4)} MPa: look at the record`)
+  }
   if (!reached.isReached) {
     warn('no-maximum', end.unloaded
       ? 'the test piece was unloaded before the force had reached a maximum: Rm is at least the value given, and there is no Ag'
@@ -34,6 +37,13 @@ export function curveChecks(analysis: CurveAnalysis, parameters: TensileParamete
     warn('forces-disagree', `the maximum force typed in, ${significant(typed, 5)} N, and that of the record, ${significant(highest.stress * areaMm2, 5)} N, differ by more than 0.5 %: the record counts`)
   }
   return checks
+}
+
+/** One reading by a fiftieth above both neighbours, well before the end: an electrical fault rather than the test piece. */
+function standsAlone({ curve: { stress }, end }: CurveAnalysis, index: number): boolean {
+  const [before, here, after] = [stress[index - 1], stress[index], stress[index + 1]]
+  if (before === undefined || here === undefined || after === undefined || index + 1 > end.last) return false
+  return here > 1.02 * Math.max(before, after) && Math.abs(before - after) < 0.02 * here
 }
 
 function missing({ elasticWindow }: TensileParameters): string {

@@ -62,7 +62,7 @@ describe('rockwell', () => {
     const grid = Array.from({ length: 10_000 }, (_, i) => ({ value: 45, xMm: (i % 100) * 2, yMm: Math.floor(i / 100) * 2 }))
     expect(codes(grid)).toEqual([])
     expect(codes(grid.map((reading) => ({ ...reading, xMm: 0, yMm: 0 })))).toHaveLength(9_999)
-  })
+  }, 60_000)
   it('asks 10 depths of thickness, 15 for a ball under ISO', () => {
     const ball = (standard: string, thicknessMm: number) => codes(readingsOf(80, 80, 80), { standard, scale: 'HRBW', surface: { shape: 'flat' }, thicknessMm })
     expect(ball('ASTM E18', 1)).toEqual([])
@@ -105,5 +105,17 @@ describe('rockwell', () => {
     const lines = rockwell.report({ parameters: flat, readings: readingsOf(45, 46), results: [] })
     expect(lines.join('\n')).toContain('diamond cone, total force 150 kgf')
     expect(lines.join('\n')).toContain('45, 46 HRC')
+  })
+  it('offers the mean by the table of its standard, with its caution', () => {
+    const converted = (standard: string, scale: string, value: number) => {
+      const parameters = { standard, scale, surface: { shape: 'flat' } }
+      return rockwell.conversions!({ parameters, results: run(readingsOf(value, value, value), parameters).results })
+    }
+    // ASTM E140-12b Table 1 and A370 Table 2 at 45 HRC; ISO 18265:2013 Table A.1 at 40.8 HRC
+    expect(converted('ASTM E18', 'HRC', 45)).toMatchObject([{ table: expect.stringContaining('E140'), caution: expect.stringContaining('not for acceptance'), values: [{ reported: '446 HV' }, { reported: '421 HBW' }, { reported: '1480 MPa' }] }])
+    expect(converted('ISO 6508-1', 'HRC', 40.8)[0]?.values.map((value) => value.reported)).toEqual(['400 HV', '380 HBW', '1290 MPa'])
+    expect(converted('ASTM E18', 'HRBW', 80)[0]?.values.map((value) => value.reported)).toEqual(['150 HV', '150 HBW', '495 MPa'])
+    expect(converted('ASTM E18', 'HREW', 90)).toEqual([])
+    expect(converted('ASTM E18', 'HRC', 69)).toEqual([])
   })
 })

@@ -1,5 +1,5 @@
 import * as Radix from '@radix-ui/react-dialog'
-import type { FormEvent, ReactNode } from 'react'
+import { useRef, type FormEvent, type ReactNode } from 'react'
 import { Button } from '../buttons/button.tsx'
 
 /**
@@ -21,6 +21,7 @@ export function Dialog({ open, onOpenChange, title, children, confirm, cancel = 
   error?: string | undefined
   onConfirm: () => void
 }) {
+  const opener = useRef<Element>(null)
   const submit = (event: FormEvent) => {
     event.preventDefault()
     if (!busy && !refusal) onConfirm()
@@ -29,7 +30,17 @@ export function Dialog({ open, onOpenChange, title, children, confirm, cancel = 
     <Radix.Root open={open} onOpenChange={onOpenChange}>
       <Radix.Portal>
         <div className="fixed inset-0 z-40 bg-[rgb(21_24_27/0.45)]" aria-hidden />
-        <Radix.Content data-modal="" className="rise fixed top-1/2 left-1/2 z-50 max-h-[calc(100dvh-32px)] w-[calc(100vw-32px)] max-w-dialog -translate-x-1/2 -translate-y-1/2 overflow-y-auto rounded border border-ink bg-sheet p-6 shadow-float">
+        <Radix.Content
+          data-modal=""
+          onOpenAutoFocus={() => {
+            opener.current = document.activeElement
+          }}
+          onCloseAutoFocus={(event) => {
+            event.preventDefault()
+            if (opener.current instanceof HTMLElement) opener.current.focus()
+          }}
+          className="rise fixed top-1/2 left-1/2 z-50 max-h-[calc(100dvh-32px)] w-[calc(100vw-32px)] max-w-dialog -translate-x-1/2 -translate-y-1/2 overflow-y-auto rounded border border-ink bg-sheet p-6 shadow-float"
+        >
           <form onSubmit={submit}>
             <Radix.Title className="mb-2 text-20 font-medium">{title}</Radix.Title>
             <Radix.Description asChild>

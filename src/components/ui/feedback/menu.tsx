@@ -62,7 +62,8 @@ function Item({ item }: { item: MenuItem }) {
           </Link>
         </Radix.Item>
       )
-    default:
+    case 'do':
+    case undefined:
       return (
         <Radix.Item className={classNames(row, item.danger && 'text-red', item.refusal && 'cursor-not-allowed text-quiet')} aria-disabled={item.refusal ? true : undefined} onSelect={(event) => (item.refusal ? event.preventDefault() : item.onSelect())}>
           {item.icon && <Icon name={item.icon} />}
