@@ -11,7 +11,7 @@ export const Text = (max: number) => z.string().trim().min(1).max(max)
 export const OptionalText = (max: number) => z.string().trim().max(max).default('')
 /** Money in the smallest unit of its currency. */
 export const Money = z.int().min(-1_000_000_000_000).max(1_000_000_000_000)
-export const Email = z.email().max(254).transform((value) => value.toLowerCase())
+export const Email = z.email('has to be an address like name@company.example').max(254).transform((value) => value.toLowerCase())
 /** 12 to 128 of any characters; what is common or guessable is refused by the server. */
 export const Password = z.string().min(12, 'at least 12 characters').max(128, 'at most 128 characters')
 

@@ -27,7 +27,7 @@ export const readSession = endpoint({ method: 'get', path: '/session', can: 'any
 
 export const SignIn = z.strictObject({
   email: Email,
-  password: z.string().min(1).max(128),
+  password: z.string().min(1, 'is needed').max(128),
   /** A bench's shared screen is signed out after half an hour without a touch. */
   sharedScreen: z.boolean().default(false),
 })
@@ -35,7 +35,7 @@ export const signIn = endpoint({ method: 'post', path: '/session', can: 'anyone'
 export const signOut = endpoint({ method: 'delete', path: '/session', can: 'anyone', response: Session })
 export const changePassword = endpoint({
   method: 'put', path: '/session/password', can: 'signed-in',
-  body: z.strictObject({ current: z.string().min(1).max(128), next: Password }), response: Session,
+  body: z.strictObject({ current: z.string().min(1, 'is needed').max(128), next: Password }), response: Session,
 })
 
 /** Says the same whether the address is known or not. */

@@ -202,7 +202,7 @@ describe('a payment', () => {
 })
 
 describe('a payment for what is not there any more', () => {
-  it('goes back in full, once, and leaves the paid job alone', async () => {
+  it('goes back in full, once', async () => {
     const house = await start()
     const { draft, checkoutId, paymentId } = await open(house)
     // as if the order had changed behind the open page, by a fault that must not cost the customer money
@@ -218,6 +218,26 @@ describe('a payment for what is not there any more', () => {
     expect(await paymentNow(paymentId)).toMatchObject({ state: 'refunded' })
     expect(control.refunds().slice(refunds).map(({ amount }) => amount)).toEqual([draft.totalMinor])
     expect(await Invoice.count({ where: { jobId: draft.id } })).toBe(0)
+  })
+
+  it('that pays for a job a second time goes back, and the job stays paid', async () => {
+    const house = await start()
+    const first = await open(house)
+    // as if closing the first page had been lost on the way
+    await Payment.update({ state: 'closed' }, { where: { id: first.paymentId } })
+    await house.agent.post(`/api/jobs/${first.draft.id}/checkout`).send({ version: first.draft.version }).expect(200)
+    control.setWebhookMode('send')
+    const second = await Payment.findOne({ where: { jobId: first.draft.id, state: 'open' }, raw: true })
+    control.pay(second?.checkoutId ?? '')
+    await control.settled()
+    control.pay(first.checkoutId)
+    await control.settled()
+    expect((await paymentNow(first.paymentId))?.state).toBe('refund owed')
+    await runTwice(refundPayment, 'payment.refund-owed', () => paymentNow(first.paymentId))
+    const job = await jobNow(house.agent, first.draft.id)
+    expect(job).toMatchObject({ state: 'placed', money: 'paid' })
+    expect(await Invoice.findByPk(job.invoiceId as string, { raw: true })).toMatchObject({ refundedMinor: 0 })
+    expect((await paymentNow(second?.id ?? ''))?.state).toBe('paid')
   })
 
   it('that comes late, after the draft was cancelled, is owed back', async () => {

@@ -13,7 +13,8 @@ function evaluate(name: string, areaMm2: number, gaugeLengthMm: number, standard
 }
 
 describe('curves constructed from closed forms', () => {
-  it.each(cases.map((one: { case: string }) => ({ name: one.case, one })) as { name: string; one: any }[])('$name', ({ name: name, one }) => {
+  for (const one of cases) it(one.case, () => {
+    const name = one.case
     const { expected, tolerance = {}, params } = one
     const area = params.S0_mm2 ?? 50
     const gauge = params.Le_mm ?? 40

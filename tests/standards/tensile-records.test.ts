@@ -7,7 +7,8 @@ const valueOf = (results: { key: string; value: number }[], key: string) => resu
 // Fraunhofer IWM / Leibniz-IWT, 42CrMoS4 round bars, CC BY 4.0: see records/README.md. Tolerances of expected.json.
 describe('42CrMoS4, measured and published', () => {
   const { specimens } = JSON.parse(recordText('42CrMoS4/expected.json'))
-  it.each(specimens.map((one: { specimen: string }) => ({ name: one.specimen, one })) as { name: string; one: any }[])('$name', ({ name: name, one }) => {
+  for (const one of specimens) it(one.specimen, () => {
+    const name = one.specimen
     const { published, tolerance, iso6892_rounded_from_published: rounded } = one
     const finalDiameter = Math.sqrt((4 * one.Su_mm2) / Math.PI)
     const parameters = { standard: 'ISO 6892-1', section: { shape: 'round', diametersMm: [one.d0_mm] }, originalGaugeLengthMm: one.L0_mm, extensometerGaugeLengthMm: one.Le_mm }
@@ -22,7 +23,8 @@ describe('42CrMoS4, measured and published', () => {
     expect(Math.abs(valueOf(results, 'elongation') - published.A_percent)).toBeLessThanOrEqual(0.05)
     const reported = Object.fromEntries(results.map((result) => [result.key, result.reported]))
     expect(reported).toMatchObject({ tensileStrength: `${rounded.Rm} MPa`, elongation: `${rounded.A.toFixed(1)} %`, reductionOfArea: `${rounded.Z} %` })
-    expect(checks.map((check) => check.code)).not.toContain('discontinuous-yielding')
+    // 46NT71 falls from 1136.1 to 1129.6 MPa over 0.27 % of strain, 0.57 %: a yield point by the rule of ISO 6892-1 Annex A, which asks for 0.5 %
+    expect(checks.some((check) => check.code === 'discontinuous-yielding')).toBe(name === '46NT71')
     // 46NTAF: the extensometer slipped in the elastic part; its published slope is 178 753 MPa
     expect(checks.some((check) => check.code === 'elastic-fit')).toBe(name === '46NTAF')
   })
@@ -31,7 +33,8 @@ describe('42CrMoS4, measured and published', () => {
 // a-hilhorst/Tensile-test-Analysis, MIT licence. No published evaluation: the expected values are an independent computation.
 describe('austenitic sheet, measured', () => {
   const { specimens } = JSON.parse(recordText('stainless/expected.json'))
-  it.each(specimens.map((one: { file: string }) => ({ name: one.file, one })) as { name: string; one: any }[])('$name', ({ name: file, one }) => {
+  for (const one of specimens) it(one.file, () => {
+    const file = one.file
     const { from_thinned_file: expected, tolerance } = one
     const parameters = { standard: 'ISO 6892-1', section: { shape: 'area', areaMm2: one.S0_mm2 }, extensometerGaugeLengthMm: one.Le_mm }
     const { results } = tensile.evaluate({ parameters, readings: { curve: curveOf(`stainless/${file}`, one.S0_mm2, one.Le_mm), finalThicknessMm: one.Su_mm2, finalWidthMm: 1 } })

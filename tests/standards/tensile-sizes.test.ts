@@ -7,7 +7,8 @@ import { recordText } from './records/read-record.ts'
 // Ten flat S355 test pieces evaluated by BAM, Zenodo record 6778336 (figures only).
 describe('S355, sizes and forces by hand', () => {
   const { cases } = JSON.parse(recordText('s355_worked.json'))
-  it.each(cases.map((one: { testpiece: string }) => ({ name: one.testpiece, one })) as { name: string; one: any }[])('$name', ({ name: name, one }) => {
+  for (const one of cases) it(one.testpiece, () => {
+    const name = one.testpiece
     const parameters = { standard: 'ISO 6892-1', section: { shape: 'rectangular', thicknessesMm: one.thickness_mm, widthsMm: one.width_mm }, originalGaugeLengthMm: one.L0_mm }
     const readings = {
       maximumForceN: 1000 * one.Fm_kN, upperYieldForceN: 1000 * one.FeH_kN, finalThicknessMm: one.au_mm, finalWidthMm: one.bu_mm,

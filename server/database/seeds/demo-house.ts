@@ -1,14 +1,14 @@
 import type { BenchAbility, WeekHours } from '../../../shared/planning/bench-hours.ts'
+import type { SiteKey } from './demo-keys.ts'
 
 /** The invented company of the demonstration: its sites, benches and machines. Nobody and nothing here exists. */
 export const company = { name: 'Tarnwick Materials Testing', address: 'Foundry Lane, Tarnwick', email: 'lab@tarnwick.example', taxPercent: 20 }
 
-export const sites = [
+export const sites: readonly { key: SiteKey; name: string; address: string; timeZone: string }[] = [
   { key: 'T', name: 'Tarnwick', address: 'Foundry Lane, Tarnwick', timeZone: 'Europe/London' },
   { key: 'O', name: 'Ollerby', address: 'Mill Road 4, Ollerby', timeZone: 'Europe/London' },
   { key: 'P', name: 'Port Selwyn', address: 'Dock Street 11, Port Selwyn', timeZone: 'Europe/London' },
-] as const
-export type SiteKey = (typeof sites)[number]['key']
+]
 
 const week = (from: string, to: string): WeekHours => [1, 2, 3, 4, 5].map((weekday) => ({ weekday, from, to }))
 const one = (kind: string, limits: BenchAbility['limits'] = {}): BenchAbility[] => [{ kind, limits }]

@@ -1,15 +1,14 @@
 import type { Right } from '../../../shared/api/words.ts'
-import type { SiteKey } from './demo-house.ts'
+import type { CustomerKey, SiteKey } from './demo-keys.ts'
 
 /** One password for all accounts of the demonstration; it refuses to be made in production unless asked for. */
 export const demoPassword = 'straw gold bronze purple'
 
-export const customers = [
+export const customers: readonly { key: CustomerKey; name: string; address: string; reportEmail: string }[] = [
   { key: 'brackwater', name: 'Brackwater Forge', address: 'Quay Works, Brackwater', reportEmail: 'quality@brackwater.example' },
   { key: 'lindmoor', name: 'Lindmoor Castings', address: 'Moor Lane 8, Lindmoor', reportEmail: 'reports@lindmoor.example' },
   { key: 'oriel', name: 'Oriel Gearworks', address: 'Oriel Park, Unit 3', reportEmail: 'inspection@oriel.example' },
-] as const
-export type CustomerKey = (typeof customers)[number]['key']
+]
 
 type DemoPerson = { email: string; name: string; what: string } & ({ role: 'client'; customer: CustomerKey } | { role: 'technician'; site: SiteKey; rights: readonly Right[] } | { role: 'manager'; site: SiteKey | null; rights: readonly Right[] })
 

@@ -11,7 +11,7 @@ import { MethodOffer } from '../../models/sites/method-offer.ts'
 import { Site } from '../../models/sites/site.ts'
 import { Verification } from '../../models/sites/verification.ts'
 import { methods } from '../../../shared/methods.ts'
-import { benches, company, offers, sites, type DemoBench, type SiteKey } from './demo-house.ts'
+import { benches, company, offers, sites, type DemoBench } from './demo-house.ts'
 import { customers, demoPassword, people } from './demo-people.ts'
 
 type Ids = Map<string, string>
@@ -52,7 +52,7 @@ async function makePeople(passwordHash: string, siteIds: Ids, customerIds: Ids, 
     const id = (await Person.create({ email, name, role, state: 'active', passwordHash, siteId, customerId: person.role === 'client' ? customerIds.get(person.customer)! : null }, { transaction: tx })).get('id')
     if (person.role === 'client') continue
     for (const method of methods) {
-      for (const right of person.rights) await Authorisation.create({ personId: id, siteId: siteId ?? siteIds.get('T' satisfies SiteKey)!, methodId: method.id, right, until, evidence: 'trial with a reference piece, witnessed' }, { transaction: tx })
+      for (const right of person.rights) await Authorisation.create({ personId: id, siteId: siteId ?? siteIds.get('T')!, methodId: method.id, right, until, evidence: 'trial with a reference piece, witnessed' }, { transaction: tx })
     }
   }
 }

@@ -2,3 +2,8 @@
 export function numberIn(reported: string): string {
   return /[-−+]?\d+(?:\.\d+)?/.exec(reported)?.[0] ?? reported
 }
+
+/** What stands beside the number in what was reported: "HRC" of "31.3 HRC"; empty where nothing does. */
+export function unitIn(reported: string): string {
+  return reported.replace(numberIn(reported), '').trim()
+}

@@ -30,7 +30,8 @@ export function maximumForce({ strain, stress }: StressStrain, from: number, las
   const close = within({ strain, stress }, index, from, last, top - 3 * noise)
   const wide = within({ strain, stress }, index, from, last, top - 12 * noise)
   const isFlat = noise > 0 && close.count > 20 && wide.to - wide.from < 1.5 * (close.to - close.from)
-  const strainThere = isFlat || noise > NOISY * top ? close.mean : (exact.from + exact.to) / 2
+  const isLevel = exact.count >= 5
+  const strainThere = !isLevel && (isFlat || noise > NOISY * top) ? close.mean : (exact.from + exact.to) / 2
   return { index, stress: top, strain: strainThere, isReached: broke || fallsBehind(stress, index, last) }
 }
 

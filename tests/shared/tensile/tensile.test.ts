@@ -167,7 +167,7 @@ describe('input that cannot be read', () => {
     ['a missing column', { section }, { curve: { forceN: [0, 1, 2] } }, 'readings.curve.extensionMm'],
     ['not a number', { section }, { curve: { extensionMm: [0, 1, 2], forceN: [0, NaN, 2] } }, 'readings.curve.forceN.1'],
     ['text', { section }, { curve: { extensionMm: [0, 1, '2'], forceN: [0, 1, 2] } }, 'readings.curve.extensionMm.2'],
-    ['too few points', { section }, { curve: { extensionMm: [], forceN: [] } }, 'readings.curve.extensionMm'],
+    ['too few points', { section }, { curve: { extensionMm: [], forceN: [0, 1, 2] } }, 'readings.curve.extensionMm'],
     ['too many points', { section }, { curve: { extensionMm: new Array(2_000_001).fill(0), forceN: [0, 1, 2] } }, 'readings.curve.extensionMm'],
     ['an absurd force', { section }, { maximumForceN: 1e12 }, 'readings.maximumForceN'],
     ['a negative length', { section }, { finalGaugeLengthMm: -1 }, 'readings.finalGaugeLengthMm'],

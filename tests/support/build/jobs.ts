@@ -49,12 +49,17 @@ export async function buildDraft({ client, site }: Pick<House, 'client' | 'site'
 
 /** A job that was paid by card and placed at the house's site, with its samples still to come. The house must offer its methods. */
 export async function buildPlacedJob(house: Pick<House, 'client' | 'site'>, order: Order = buildOrder()): Promise<Job> {
-  const { id: jobId, siteId, customerId, totalMinor: amountMinor, currency, version: jobVersion, number } = await buildDraft(house, order)
+  const draft = await buildDraft(house, order)
+  await payDraft(draft)
+  const job = await Job.findByPk(draft.id, { raw: true })
+  if (job?.state !== 'placed') throw new Error(`the job was not placed but is ${job?.state}`)
+  return job
+}
+
+/** As if the draft's payment page had been opened and paid. */
+export async function payDraft({ id: jobId, siteId, customerId, totalMinor: amountMinor, currency, version: jobVersion, number }: JobView): Promise<void> {
   const checkoutId = `cs_test_${randomUUID()}`
   await Job.update({ waitsForPayment: true }, { where: { id: jobId } })
   await Payment.create({ jobId, siteId, customerId, amountMinor, currency, jobVersion, state: 'open', checkoutId, url: 'http://127.0.0.1:9/pay' })
   await settleAs({ id: checkoutId, status: 'complete', paid: true, paymentIntentId: `pi_${randomUUID()}`, amountMinor, currency, reference: number, url: null }, { person: null, requestId: 'test' })
-  const job = await Job.findByPk(jobId, { raw: true })
-  if (job?.state !== 'placed') throw new Error(`the job was not placed but is ${job?.state}`)
-  return job
 }

@@ -35,7 +35,7 @@ export function Derivation({ result, budget = [], requirement, verdict }: Deriva
           <LimitRule value={result.value} uncertainty={result.expandedUncertainty} lower={limit.lower} upper={limit.upper} unit={result.unit} className="mt-1" />
           {outcome && (
             <p className="flex flex-wrap items-center justify-between gap-x-3">
-              <Met outcome={outcome.outcome}>{outcomeWords[outcome.outcome]} {limitText(limit.lower, limit.upper)} {result.unit}</Met>
+              <Met outcome={outcome.outcome}>{outcomeWords[outcome.outcome]} {limitText(limit.lower, limit.upper, undefined, result.unit)}</Met>
               {outcome.probabilityOfConformity !== undefined && <span className="text-12 text-quiet">probability {percent(outcome.probabilityOfConformity)}</span>}
             </p>
           )}

@@ -60,12 +60,13 @@ export function limitScale({ value, lower, upper, uncertainty = 0, readings = []
   return [Math.min(middle - span / 2, low - room), Math.max(middle + span / 2, high + room)]
 }
 
-/** The limits in words: "29.0 to 34.0", "850 or more", "at most 0.35". */
-export function limitText(lower: number | undefined, upper: number | undefined, decimals?: number): string {
+/** The limits in words: "29.0 to 34.0 HRC", "850 MPa or more", "at most 0.35"; the unit may be left to a column. */
+export function limitText(lower: number | undefined, upper: number | undefined, decimals?: number, unit?: string): string {
   const say = (number: number) => formatNumber(number, decimals)
-  if (lower !== undefined && upper !== undefined) return `${say(lower)} to ${say(upper)}`
-  if (lower !== undefined) return `${say(lower)} or more`
-  if (upper !== undefined) return `at most ${say(upper)}`
+  const withUnit = (number: number) => (unit ? `${say(number)} ${unit}` : say(number))
+  if (lower !== undefined && upper !== undefined) return `${say(lower)} to ${withUnit(upper)}`
+  if (lower !== undefined) return `${withUnit(lower)} or more`
+  if (upper !== undefined) return `at most ${withUnit(upper)}`
   return 'no limits'
 }
 

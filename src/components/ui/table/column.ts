@@ -16,8 +16,8 @@ export type Column<Row> = {
   value?: (row: Row) => CellValue
   /** Right-aligned. */
   numeric?: boolean
-  /** Sorting by this column; true when it has a value. `down` starts with the greatest. */
-  sort?: boolean | 'down'
+  /** Sorting by this column; true when it has a value. `down` starts with the greatest; `only up` is for servers that know one way. */
+  sort?: boolean | 'down' | 'only up'
   filter?: { kind: 'text'; words: string } | { kind: 'choice'; all: string; choices: readonly { value: string; label: string }[]; of?: (row: Row) => CellValue }
   /** The cell takes this share of the width, in percent. */
   share?: number

@@ -16,7 +16,7 @@ export function HeadCell<Row>({ column, address }: { column: Column<Row>; addres
     const first = column.sort === 'down'
     if (!sorted) return address.setSort({ id: column.id, down: first })
     const isFirst = (sorted === 'descending') === first
-    address.setSort(isFirst ? { id: column.id, down: !first } : undefined)
+    address.setSort(isFirst && column.sort !== 'only up' ? { id: column.id, down: !first } : undefined)
   }
   return (
     <th role="columnheader" scope="col" aria-sort={sorted} className={classNames(column.numeric && 'num')} style={column.share ? { width: `${column.share}%` } : undefined}>

@@ -12,7 +12,7 @@ export function TableTools<Row>({ columns, address }: { columns: readonly Column
   const set = Object.keys(address.filters).length
   const choices = sortable.flatMap((column) => [
     { value: column.id, label: `${columnName(column)}, up` },
-    { value: `-${column.id}`, label: `${columnName(column)}, down` },
+    ...(column.sort === 'only up' ? [] : [{ value: `-${column.id}`, label: `${columnName(column)}, down` }]),
   ])
   return (
     <details className="mb-3 list:hidden">

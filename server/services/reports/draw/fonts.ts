@@ -1,0 +1,64 @@
+import { createRequire } from 'node:module'
+import type PDFDocument from 'pdfkit'
+
+type Doc = typeof PDFDocument.prototype
+export type Face = 'regular' | 'medium' | 'bold' | 'mono' | 'mono medium'
+
+const require = createRequire(import.meta.url)
+/** The subsets of a family in which a character is looked for, in this order; each is a font of its own. */
+const subsets = { roboto: ['latin', 'latin-ext', 'greek', 'math', 'symbols', 'cyrillic', 'vietnamese'], 'roboto-mono': ['latin', 'latin-ext', 'greek', 'cyrillic', 'vietnamese'] } as const
+const faces: Record<Face, { family: keyof typeof subsets; weight: 400 | 500 | 700; otherwise?: Face }> = {
+  regular: { family: 'roboto', weight: 400 }, medium: { family: 'roboto', weight: 500 }, bold: { family: 'roboto', weight: 700 },
+  mono: { family: 'roboto-mono', weight: 400, otherwise: 'regular' }, 'mono medium': { family: 'roboto-mono', weight: 500, otherwise: 'medium' },
+}
+
+/** pdfkit keeps the font that is chosen in `_font`; nothing public tells whether a font has a sign. */
+type WithFont = { _font: { font: { hasGlyphForCodePoint(point: number): boolean } } }
+
+/** The fonts of one document: text is cut into runs, each in the first subset that holds all of its characters. */
+export class Fonts {
+  private readonly registered = new Set<string>()
+  private readonly places = new Map<string, string>()
+  private readonly doc: Doc
+  constructor(doc: Doc) {
+    this.doc = doc
+  }
+
+  /** Text in runs of one font each. What no font holds becomes a question mark. */
+  runs(text: string, face: Face): { font: string; text: string }[] {
+    const runs: { font: string; text: string }[] = []
+    for (const character of text) {
+      const font = this.fontOf(character, face)
+      const last = runs.at(-1)
+      const shown = font === null ? '?' : character
+      const name = font ?? this.fontOf('?', face)!
+      if (last?.font === name) last.text += shown
+      else runs.push({ font: name, text: shown })
+    }
+    return runs
+  }
+
+  private fontOf(character: string, face: Face): string | null {
+    const key = `${face} ${character}`
+    const known = this.places.get(key)
+    if (known !== undefined) return known || null
+    const { family, weight, otherwise } = faces[face]
+    const subset = subsets[family].find((one) => this.has(`${family}-${one}-${weight}-normal`, character))
+    const found = subset ? `${family}-${subset}-${weight}-normal` : otherwise ? this.fontOf(character, otherwise) : null
+    this.places.set(key, found ?? '')
+    return found
+  }
+
+  private has(font: string, character: string): boolean {
+    if (!this.registered.has(font)) {
+      this.registered.add(font)
+      this.doc.registerFont(font, fontFile(font))
+    }
+    this.doc.font(font)
+    return (this.doc as unknown as WithFont)._font.font.hasGlyphForCodePoint(character.codePointAt(0)!)
+  }
+}
+
+export function fontFile(font: string): string {
+  return require.resolve(`@fontsource/${font.startsWith('roboto-mono') ? 'roboto-mono' : 'roboto'}/files/${font}.woff`)
+}
