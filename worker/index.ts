@@ -21,7 +21,9 @@ const redis = new Redis(settings.REDIS_URL, { maxRetriesPerRequest: 1, enableOff
 redis.on('error', (error) => log.warn({ error: error.message }, 'redis'))
 announceWith((ledgerId) => void redis.publish(changesChannel(prefix), String(ledgerId)).catch(() => undefined))
 
-const running = startWorker({ redisUrl: settings.REDIS_URL, prefix, tasks, sweeps, log })
+const milliseconds = (name: string) => (process.env[name] ? Number(process.env[name]) : undefined)
+const asked = { lockMs: milliseconds('WORKER_LOCK_MS'), sweepMs: milliseconds('WORKER_SWEEP_MS'), againSeconds: milliseconds('WORKER_AGAIN_SECONDS') }
+const running = startWorker({ redisUrl: settings.REDIS_URL, prefix, tasks, sweeps, log, pace: Object.fromEntries(Object.entries(asked).filter(([, value]) => value !== undefined)) })
 log.info('the worker is running')
 
 /** Says that it lives, for whoever supervises it. */

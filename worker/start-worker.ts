@@ -5,8 +5,9 @@ import { carryOut, giveUp } from './carry-out.ts'
 import { handAgain, relayOnce, type Handed } from './relay.ts'
 import type { Task } from './task.ts'
 
-export type Pace = { relayMs: number; againSeconds: number; sweepMs: number }
-const usual: Pace = { relayMs: 300, againSeconds: 60, sweepMs: 30_000 }
+/** `lockMs`: how long a dead worker's piece of work waits before another takes it up; a living worker renews its lock. */
+export type Pace = { relayMs: number; againSeconds: number; sweepMs: number; lockMs: number }
+const usual: Pace = { relayMs: 300, againSeconds: 60, sweepMs: 30_000, lockMs: 20_000 }
 
 export type Running = { stop(): Promise<void> }
 
@@ -21,7 +22,7 @@ export function startWorker(options: { redisUrl: string; prefix: string; tasks: 
   const connections = [connection(), connection()]
   for (const one of connections) one.on('error', (error) => log.warn({ error: error.message }, 'redis'))
   const queue = new Queue<Handed>('tasks', { connection: connections[0]!, prefix })
-  const worker = new Worker<Handed>('tasks', (job) => carryOut(job.data, tasks), { connection: connections[1]!, prefix, concurrency: options.concurrency ?? 4, stalledInterval: 5000, lockDuration: 20_000, maxStalledCount: 20 })
+  const worker = new Worker<Handed>('tasks', (job) => carryOut(job.data, tasks), { connection: connections[1]!, prefix, concurrency: options.concurrency ?? 4, stalledInterval: pace.lockMs / 4, lockDuration: pace.lockMs, maxStalledCount: 20 })
   queue.on('error', (error) => log.warn({ error: error.message }, 'queue'))
   worker.on('error', (error) => log.warn({ error: error.message }, 'worker'))
   worker.on('failed', (job, error) => {

@@ -4,6 +4,9 @@ import { Hold } from '../../server/models/jobs/hold.ts'
 import { Job } from '../../server/models/jobs/job.ts'
 import { Sample } from '../../server/models/jobs/sample.ts'
 import { Step } from '../../server/models/jobs/step.ts'
+import { Authorisation } from '../../server/models/people/authorisation.ts'
+import { Bench } from '../../server/models/sites/bench.ts'
+import { Site } from '../../server/models/sites/site.ts'
 import { startTestApp } from '../support/app.ts'
 import { buildHouse } from '../support/build/house.ts'
 import { buildDraft, buildOffers, buildOrder, buildPlacedJob, buildSampleOrder } from '../support/build/jobs.ts'
@@ -113,6 +116,34 @@ describe('a quote', () => {
     expect(body.faults[0].cures.length).toBeGreaterThan(0)
     const because = (siteId: string) => body.sites.find((one: { siteId: string }) => one.siteId === siteId).because
     expect([because(site.id), because(bare.id)]).toEqual(['all tests are done here', 'does not offer Rockwell HRC'])
+  })
+})
+
+describe('a promise', () => {
+  const hours = [1, 2, 3, 4, 5].map((weekday) => ({ weekday, from: '08:00', to: '17:00' }))
+  async function withBenches() {
+    const house = await start(['rockwell'])
+    await Site.update({ hours }, { where: { id: house.site.id } })
+    const bench = (code: string, kind: string, limits: Record<string, [number, number]>) => Bench.create({ siteId: house.site.id, name: code, code: `${code} ${house.site.name}`, units: 1, hours, does: [{ kind, limits }] })
+    await bench('Saw', 'section', {})
+    await bench('Hardness', 'rockwell', { forceKgf: [15, 150] })
+    return house
+  }
+  const quote = async (house: Awaited<ReturnType<typeof start>>, count: number) => (await house.agent.post('/api/quotes').send({ order: buildOrder({ siteId: house.site.id }, { count }) }).expect(200)).body
+
+  it('is made from the benches and people of the site, later for more work, and kept when the job is placed', async () => {
+    const house = await withBenches()
+    const nobody = await quote(house, 1)
+    expect(nobody.promise).toBeNull()
+    expect(nobody.sites.find((one: { siteId: string }) => one.siteId === house.site.id)).toMatchObject({ finish: null, because: expect.stringMatching(/^measure HRC: /) })
+    await Authorisation.create({ personId: house.technician.id, siteId: house.site.id, methodId: 'rockwell', right: 'carry out', until: '2099-12-31', evidence: 'witnessed' })
+    const small = (await quote(house, 1)).promise
+    const large = (await quote(house, 120)).promise
+    expect(Date.parse(small.receiveBy)).toBeGreaterThan(Date.now())
+    expect(Date.parse(small.finish)).toBeGreaterThan(Date.parse(small.receiveBy))
+    expect(Date.parse(large.finish)).toBeGreaterThan(Date.parse(small.finish))
+    const job = await buildPlacedJob(house, buildOrder({}, { count: 1 }))
+    expect(job.promisedAt?.toISOString()).toBe(small.finish)
   })
 })
 

@@ -11,7 +11,7 @@ export async function quoteFor(order: Order, terms: OrderTerms, now: Date): Prom
   const choices = sitesFor(order, terms.offers, terms.sites)
   const asked = choices.filter(({ siteId, able }) => able && (order.siteId === null || order.siteId === siteId)).map(({ siteId }) => siteId)
   const promises = faults.length > 0 ? [] : await promiseForOrder(order, asked, now)
-  const best = [...promises].sort((a, b) => a.finish.getTime() - b.finish.getTime())[0]
+  const best = promises.flatMap(({ finish, ...promise }) => (finish ? [{ ...promise, finish }] : [])).sort((a, b) => a.finish.getTime() - b.finish.getTime())[0]
   const name = (siteId: string) => terms.sites.find(({ id }) => id === siteId)?.name ?? ''
   return {
     ...priceOf(order, terms.offers, terms.taxPercent),
@@ -19,7 +19,7 @@ export async function quoteFor(order: Order, terms: OrderTerms, now: Date): Prom
     faults,
     sites: choices.map(({ siteId, name: siteName, because }) => {
       const promise = promises.find((one) => one.siteId === siteId)
-      return { siteId, name: siteName, finish: promise?.finish.toISOString() ?? null, because: promise?.because ?? because }
+      return { siteId, name: siteName, finish: promise?.finish?.toISOString() ?? null, because: promise?.because ?? because }
     }),
     promise: best ? { siteId: best.siteId, siteName: name(best.siteId), finish: best.finish.toISOString(), receiveBy: best.receiveBy.toISOString() } : null,
   }

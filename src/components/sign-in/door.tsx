@@ -13,7 +13,7 @@ export function Door({ title, under, children, foot }: { title: string; under?: 
           <BrandMark className="size-8" />
           Crosshead
         </Link>
-        <div className="my-auto grid w-full max-w-[340px] gap-5 [--control:2.75rem]">
+        <div className="my-auto grid w-full max-w-[340px] gap-5 max-tablet:max-w-none [--control:2.75rem]">
           <div>
             <h1 className="text-34 font-medium tracking-[-.02em]">{title}</h1>
             {under && <p className="mt-0.5 text-quiet">{under}</p>}

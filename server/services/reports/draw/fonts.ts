@@ -1,5 +1,7 @@
+import { readFileSync } from 'node:fs'
 import { createRequire } from 'node:module'
 import type PDFDocument from 'pdfkit'
+import { sfntOf } from './sfnt-of.ts'
 
 type Doc = typeof PDFDocument.prototype
 export type Face = 'regular' | 'medium' | 'bold' | 'mono' | 'mono medium'
@@ -59,6 +61,14 @@ export class Fonts {
   }
 }
 
-export function fontFile(font: string): string {
-  return require.resolve(`@fontsource/${font.startsWith('roboto-mono') ? 'roboto-mono' : 'roboto'}/files/${font}.woff`)
+const loaded = new Map<string, Buffer>()
+
+/** A font of the package, ready for pdfkit; read once a process. */
+export function fontFile(font: string): Buffer {
+  const known = loaded.get(font)
+  if (known) return known
+  const path = require.resolve(`@fontsource/${font.startsWith('roboto-mono') ? 'roboto-mono' : 'roboto'}/files/${font}.woff`)
+  const read = sfntOf(readFileSync(path))
+  loaded.set(font, read)
+  return read
 }

@@ -1,4 +1,4 @@
-import { raw } from 'bwip-js/node'
+import { toSVG } from 'bwip-js/node'
 import type { ReportContent } from '../../../../shared/reports/content.ts'
 import { timeWords } from '../../../../shared/reports/words/day-words.ts'
 import { edge, ink, mm, page, quiet, width } from './ink.ts'
@@ -75,20 +75,11 @@ export function checkLink({ checkAddress, number, revision, code }: Pick<ReportC
   return `${checkAddress}?${new URLSearchParams({ number: `${number}/${revision}`, code }).toString()}`
 }
 
-/** A Data Matrix (ISO/IEC 16022), each row of modules as stripes. */
+/** A Data Matrix (ISO/IEC 16022) of vectors, black on the paper's own quiet zone. */
 function drawCode({ doc }: Paper, text: string, left: number, top: number): void {
-  const [symbol] = raw({ bcid: 'datamatrix', text, parse: false })
-  if (!symbol || !('pixs' in symbol)) throw new Error('the code could not be drawn')
-  const { pixs, pixx, pixy } = symbol
-  const module = size / pixx
-  for (let row = 0; row < pixy; row += 1) {
-    for (let from = 0; from < pixx;) {
-      if (!pixs[row * pixx + from]) { from += 1; continue }
-      let to = from
-      while (to < pixx && pixs[row * pixx + to]) to += 1
-      doc.rect(left + from * module, top + row * module, (to - from) * module, module + 0.02)
-      from = to
-    }
-  }
-  doc.fill(ink)
+  const svg = toSVG({ bcid: 'datamatrix', text, scale: 2 })
+  const side = Number(/viewBox="0 0 (\d+)/.exec(svg)?.[1])
+  const path = /<path d="([^"]+)"/.exec(svg)?.[1]
+  if (!path || !(side > 0)) throw new Error('the code could not be drawn')
+  doc.save().translate(left, top).scale(size / side).path(path).fill(ink, 'even-odd').restore()
 }

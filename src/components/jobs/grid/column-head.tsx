@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react'
 import type { OrderColumn, OrderFault } from '../../../../shared/api/orders.ts'
 import { formFields } from '../../../../shared/method/form.ts'
 import type { Method } from '../../../../shared/method/method.ts'
@@ -36,7 +37,7 @@ export function ColumnHead({ column, first, ticked, rows, faults, deeds }: { col
 }
 
 /** The parameters and limits of a test, beside the button that opens it. */
-export function ColumnPanel({ column, faults, deeds, trigger }: { column: OrderColumn; faults: readonly OrderFault[]; deeds: ColumnDeeds; trigger: React.ReactNode }) {
+export function ColumnPanel({ column, faults, deeds, trigger }: { column: OrderColumn; faults: readonly OrderFault[]; deeds: ColumnDeeds; trigger: ReactNode }) {
   const { method, label } = orderedTest(column)
   return (
     <Popover label={`How ${label} is done`} trigger={trigger} className="w-[min(480px,calc(100vw-24px))]! font-normal">

@@ -31,7 +31,7 @@ export function LimitsForm({ names, mainResult, value, onValue }: { names: reado
           const limit = limits.find((one) => one.key === key)
           return (
             <div key={key} className="grid grid-cols-[minmax(0,1fr)_112px_112px] items-center gap-2">
-              <span className="text-13 leading-tight"><SymbolText symbol={symbol} /> <span className="text-quiet">{name}</span></span>
+              <span className="text-13 leading-tight"><SymbolText>{symbol}</SymbolText> <span className="text-quiet">{name}</span></span>
               <NumberField label={`${name}, lowest`} labelHidden placeholder="from" unit={unit} step={10 ** -decimals} value={limit?.lower} onValue={(lower) => set(key, { lower })} arrows={false} />
               <NumberField label={`${name}, highest`} labelHidden placeholder="to" unit={unit} step={10 ** -decimals} value={limit?.upper} onValue={(upper) => set(key, { upper })} arrows={false} />
             </div>

@@ -1,0 +1,1 @@
+export { NamedView as TensileView } from '../named/named-view.tsx'
