@@ -8,10 +8,13 @@ import { changesChannel } from '../integrations/changes-channel.ts'
 import { lastLedgerId, readLedgerAfter, type Told } from '../services/ledger/read-ledger.ts'
 import { log } from './log.ts'
 
-type Listener = { caller: Caller; res: Response }
+/** `upTo` is the last number of the ledger that this stream has been told of. */
+type Listener = { caller: Caller; res: Response; upTo: number }
 
 /** A stream that falls further behind than this is told to fetch everything anew. */
 const longest = 1000
+/** Bytes that wait for a slow reader; beyond them the stream is cut, and the browser comes back for what it missed. */
+const mostWaiting = 1_000_000
 const endsStreams = new Set(['person.disabled', 'person.password-changed', 'person.signed-out'])
 
 /**
@@ -37,16 +40,26 @@ export class ChangesHub {
 
   /** Opens a stream; `lastSeen` is the browser's Last-Event-ID after a lost connection. */
   async open(caller: Caller, res: Response, lastSeen: number | null): Promise<void> {
+    const listener: Listener = { caller, res, upTo: 0 }
+    const beat = setInterval(() => write(res, ': here\n\n'), 20_000)
+    let closed = false
+    res.on('close', () => { closed = true; clearInterval(beat); this.listeners.delete(listener) })
+    const head = await lastLedgerId()
+    if (closed) return
+    // a number that the ledger has not reached is from nowhere
+    listener.upTo = Math.min(lastSeen ?? head, head)
     res.writeHead(200, { 'content-type': 'text/event-stream', 'cache-control': 'no-store', 'x-accel-buffering': 'no', connection: 'keep-alive' })
-    const listener = { caller, res }
-    const start = lastSeen ?? (await lastLedgerId())
-    res.write(`retry: 1000\nid: ${start}\nevent: hello\ndata: {}\n\n`)
-    if (this.listeners.size === 0) this.seen = start
-    const missed = lastSeen === null ? [] : await readLedgerAfter(lastSeen, longest)
-    if (missed.length === longest) res.write(`id: ${await lastLedgerId()}\nevent: everything\ndata: {}\n\n`)
-    else for (const told of missed) tell(listener, told)
-    const beat = setInterval(() => res.write(': here\n\n'), 20_000)
-    res.on('close', () => { clearInterval(beat); this.listeners.delete(listener) })
+    write(res, `retry: 1000\nid: ${listener.upTo}\nevent: hello\ndata: {}\n\n`)
+    if (head - listener.upTo >= longest) {
+      listener.upTo = head
+      write(res, `id: ${head}\nevent: everything\ndata: {}\n\n`)
+    }
+    // what happened since is told before the stream joins the others, and again until nothing lies between
+    do {
+      for (const told of await readLedgerAfter(listener.upTo, longest)) tell(listener, told)
+      if (closed) return
+      if (this.listeners.size === 0) this.seen = listener.upTo
+    } while (listener.upTo < this.seen)
     this.listeners.add(listener)
     this.look()
   }
@@ -82,10 +95,26 @@ export class ChangesHub {
   }
 }
 
-function tell({ caller, res }: Listener, told: Told): void {
-  if (endsStreams.has(told.type) && told.subjectId === caller.person.id) return void res.end()
+function tell(listener: Listener, told: Told): void {
+  const { caller, res } = listener
+  if (told.id <= listener.upTo) return
+  listener.upTo = told.id
+  if (endsStreams.has(told.type) && told.subjectId === caller.person.id) {
+    // with its number, so that a browser that is still signed in comes back past it
+    write(res, `id: ${told.id}\nevent: ended\ndata: {}\n\n`)
+    // the session is touched before the stream really ends; nothing more may be said meanwhile
+    listener.upTo = Infinity
+    return void res.end()
+  }
   const changes = [{ subject: told.subject, id: told.subjectId }, ...told.touches].filter((change) => mayKnow(caller, change, told))
-  if (changes.length > 0) res.write(`id: ${told.id}\nevent: changes\ndata: ${JSON.stringify(changes)}\n\n`)
+  if (changes.length > 0) write(res, `id: ${told.id}\nevent: changes\ndata: ${JSON.stringify(changes)}\n\n`)
+}
+
+/** Writing to a stream that was ended would end the process. */
+function write(res: Response, text: string): void {
+  if (res.writableEnded || res.destroyed) return
+  res.write(text)
+  if (res.writableLength > mostWaiting) res.destroy()
 }
 
 function mayKnow(caller: Caller, { subject: name, id }: Change, { customerId, siteId }: Told): boolean {

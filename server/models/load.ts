@@ -7,6 +7,8 @@ import { accessibleWhere } from './accessible.ts'
 
 type Asker = { ability: AppAbility }
 type Table<R extends object> = ModelStatic<Model<R, never>>
+/** TestRun as people read it: test run. */
+const wordsOf = (name: SubjectName) => name.replace(/(?<=[a-z])[A-Z]/g, ' $&').toLowerCase()
 const rowOf = <R extends object>(table: ModelStatic<Model>): Table<R> => table as unknown as Table<R>
 
 /** The row with this id, if the caller may read it; otherwise `not-found`, as if it were not there. Locks it inside a transaction when asked. */
@@ -15,7 +17,7 @@ export async function loadOne<T extends ModelStatic<Model>>(
 ): Promise<T extends ModelStatic<Model<infer R, infer _N>> ? R : never> {
   const allowed = accessibleWhere(caller.ability, 'read', name)
   const row = allowed && (await rowOf<Record<string, unknown>>(table).findOne({ where: { [Op.and]: [{ id }, allowed] } as WhereOptions, raw: true, transaction: tx, lock: lock && tx ? tx.LOCK.UPDATE : undefined }))
-  if (!row) throw new Problem('not-found', `there is no such ${name.toLowerCase()}`)
+  if (!row) throw new Problem('not-found', `there is no such ${wordsOf(name)}`)
   return row as never
 }
 
@@ -23,7 +25,7 @@ export async function loadOne<T extends ModelStatic<Model>>(
 export function must(caller: Asker, action: Action, name: SubjectName, row: SubjectFields): void {
   const record = subject(name, { ...row }) as never
   if (caller.ability.can(action, record)) return
-  throw new Problem('not-allowed', caller.ability.relevantRuleFor(action, record)?.reason ?? `you may not ${action} this ${name.toLowerCase()}`)
+  throw new Problem('not-allowed', caller.ability.relevantRuleFor(action, record)?.reason ?? `you may not ${action} this ${wordsOf(name)}`)
 }
 
 /** Refuses a change that was made on an older version than the record's. */

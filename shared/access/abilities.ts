@@ -10,6 +10,9 @@ export type Who = { id: string; role: Role; customerId: string | null; siteIds: 
 
 type Grant = (builder: Pick<AbilityBuilder<AppAbility>, 'can' | 'cannot'>, who: Who) => void
 
+/** A draft is the customer's own paper until it is placed. */
+const ordered = { state: { $ne: 'draft' } }
+
 const roles: Record<Role, Grant> = {
   client({ can }, { id, customerId }) {
     if (!customerId) return
@@ -25,7 +28,8 @@ const roles: Record<Role, Grant> = {
   },
   technician({ can, cannot }, { id, siteIds }) {
     const here = { siteId: { $in: [...siteIds] } }
-    can('read', ['Job', 'Sample', 'Test', 'Step', 'PlanEntry', 'Hold', 'Message', 'File', 'TestRun', 'Bench', 'Equipment'], here)
+    can('read', ['Sample', 'Test', 'Step', 'PlanEntry', 'Hold', 'Message', 'File', 'TestRun', 'Bench', 'Equipment'], here)
+    can('read', 'Job', { ...here, ...ordered })
     can('receive', ['Sample', 'Hold'], here)
     can('prepare', 'Step', here)
     can('record', 'TestRun', here)
@@ -37,10 +41,11 @@ const roles: Record<Role, Grant> = {
   },
   manager({ can, cannot }, { id, siteIds }) {
     const here = { siteId: { $in: [...siteIds] } }
-    can('read', ['Job', 'Sample', 'Test', 'Step', 'PlanEntry', 'Hold', 'Message', 'File', 'TestRun', 'Bench', 'Equipment', 'Report', 'Invoice', 'Event'], here)
+    can('read', ['Sample', 'Test', 'Step', 'PlanEntry', 'Hold', 'Message', 'File', 'TestRun', 'Bench', 'Equipment', 'Report', 'Invoice', 'Event'], here)
+    can('read', 'Job', { ...here, ...ordered })
     can('receive', ['Sample', 'Hold'], here)
     can('create', ['File', 'Message'], here)
-    can('cancel', 'Job', here)
+    can('cancel', 'Job', { ...here, ...ordered })
     can('manage', 'PlanEntry', here)
     can('review', 'TestRun', here)
     cannot('review', 'TestRun', { performedById: id }).because('You ran this test. Someone else has to review it.')

@@ -29,6 +29,9 @@ export const TestRun = z.object({
   evaluation: Evaluation.nullable(), remark: z.string(), reviews: z.array(Review),
   /** Why I may not review it; empty when I may. */
   notMineToReview: z.string(),
+  /** The last day of my own right to review it; null when I have none. */
+  mayReviewUntil: Day.nullable(),
+  /** The last day of the right to carry it out, of the person who ran it. */
   authorisedUntil: Day.nullable(),
   /** Accepted results of the same sample by other tests, to hold this one against. */
   sameSample: z.array(z.object({ label: z.string(), symbol: z.string(), reported: z.string(), value: z.number(), key: z.string() })),

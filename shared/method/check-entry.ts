@@ -29,10 +29,11 @@ function schemaAt(method: Method, side: 'parameters' | 'readings', key: string):
   }
   const { readings } = method
   if (!method.isSet) return partOf(readings, key) ?? 'is not known here'
-  if (!/^\d{1,5}$/.test(key) || Number(key) >= mostRows) return `rows are numbered from 0 to ${mostRows - 1}`
+  if (!/^(0|[1-9]\d{0,4})$/.test(key) || Number(key) >= mostRows) return `rows are numbered from 0 to ${mostRows - 1}`
   return readings instanceof z.ZodArray ? (readings.element as z.ZodType) : 'is not known here'
 }
 
 function partOf(schema: z.ZodType, key: string): z.ZodType | undefined {
-  return schema instanceof z.ZodObject ? (schema.shape as Record<string, z.ZodType | undefined>)[key] : undefined
+  // only the schema's own keys: every object answers to names like "constructor"
+  return schema instanceof z.ZodObject && Object.hasOwn(schema.shape, key) ? (schema.shape as Record<string, z.ZodType | undefined>)[key] : undefined
 }

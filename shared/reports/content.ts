@@ -35,7 +35,7 @@ export const ReportContent = z.object({
   further: z.array(z.object({ label: z.string(), columns: z.array(z.object({ symbol: z.string(), unit: z.string(), name: z.string() })), rows: z.array(z.object({ sample: z.string(), cells: z.array(z.string()) })) })),
   /** 7.8.6 */ conformity: z.object({ statement: z.string(), rule: z.string(), outcome: Outcome, findings: z.array(z.string()), limits: z.array(z.string()) }).nullable(),
   /** Every single reading that counts, for those who want to work it out again. */
-  readings: z.array(z.object({ sample: z.string(), label: z.string(), columns: z.array(z.string()), rows: z.array(z.array(z.string())), struck: z.array(z.string()) })),
+  readings: z.array(z.object({ sample: z.string(), label: z.string(), columns: z.array(z.string()), rows: z.array(z.array(z.string())), /** What was struck out and why, and how it was done where that differs. */ notes: z.array(z.string()) })),
   conversions: z.array(z.object({ sample: z.string(), of: z.string(), table: z.string(), caution: z.string(), values: z.array(z.object({ scale: z.string(), reported: z.string(), informative: z.boolean() })) })),
   pictures: z.array(z.object({ sample: z.string(), picture: Picture })),
   /** n: additions to, deviations or exclusions from the method */ deviations: z.array(z.string()),

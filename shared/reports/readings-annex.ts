@@ -18,8 +18,8 @@ export function readingsAnnex(tests: readonly ReportedTest[], differing: Readonl
     const own = fields.get(method.id) ?? formFields(method.readings)
     fields.set(method.id, own)
     const { columns, rows } = Array.isArray(run.input.readings) ? setOf(run.input.readings, own) : namedOf(run.input.readings, own)
-    const lines = differing.has(label) && !method.isSet ? linesOf(test).map((line) => ['How', line]) : []
-    return [{ sample, label, columns, rows: [...lines, ...rows], struck: run.struck.map(({ path, reason }) => `${placeOf(path, own)} struck out: ${reason}`) }]
+    const lines = differing.has(label) ? linesOf(test) : []
+    return [{ sample, label, columns, rows, notes: [...lines, ...run.struck.map(({ path, reason }) => `${placeOf(path, own)} struck out: ${reason}`)] }]
   })
 }
 
@@ -31,7 +31,8 @@ function setOf(readings: readonly unknown[], fields: readonly Field[]): { column
 
 function namedOf(readings: unknown, fields: readonly Field[]): { columns: string[]; rows: string[][] } {
   const given = isRecord(readings) ? readings : {}
-  return { columns: ['Reading', 'Value'], rows: fields.filter(({ name }) => given[name] !== undefined).map((field) => [headOf(field), written(given[field.name], field)]) }
+  const used = fields.filter(({ name }) => given[name] !== undefined)
+  return { columns: used.map(headOf), rows: used.length > 0 ? [used.map((field) => written(given[field.name], field))] : [] }
 }
 
 function headOf(field: Field): string {
@@ -48,7 +49,7 @@ function written(value: unknown, field: Field): string {
   }
   if (typeof value !== 'number') return typeof value === 'string' ? value : JSON.stringify(value)
   // as it was typed or shown by the machine: with the decimals of its step, and more where there are more
-  const decimals = 'step' in field && field.step !== undefined ? (String(field.step).split('.')[1] ?? '').length : 0
+  const decimals = 'step' in field && field.step !== undefined && Number.isInteger(Math.log10(field.step)) ? -Math.log10(field.step) : 0
   const text = String(Number(value.toPrecision(12)))
   return (text.split('.')[1] ?? '').length < decimals && !text.includes('e') ? value.toFixed(decimals) : text
 }

@@ -6,6 +6,7 @@ import { usualTestPiece } from './plan/test-piece.ts'
 import { plain } from './section-area.ts'
 import { TensileParameters, tensileStandards } from './tensile-parameters.ts'
 import { TensileReadings } from './tensile-readings.ts'
+import { tensilePictures } from './tensile-pictures.ts'
 import { tensileReport } from './tensile-report.ts'
 
 /** Tensile test at room temperature: from sizes, forces and a load-extension record to strengths, elongations and reduction of area. */
@@ -46,4 +47,5 @@ export const tensile = defineMethod({
   ],
   evaluate: evaluateTensile,
   report: tensileReport,
+  pictures: tensilePictures,
 })

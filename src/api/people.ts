@@ -25,3 +25,5 @@ export const jobEventsQuery = (jobId: string) => infiniteQueryOptions({
   initialPageParam: undefined as string | undefined, getNextPageParam: ({ next }) => next ?? undefined,
 })
 export const fileAddress = (fileId: string) => addressOf(downloadFile, { fileId })
+/** A picture's copy for display. */
+export const filePicture = (fileId: string) => addressOf(downloadFile, { fileId }, { as: 'display' })

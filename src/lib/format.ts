@@ -84,8 +84,12 @@ export function formatWhen(at: string | Date, style: DayStyle = 'week', manner: 
 
 /** Whether two instants fall on one day at the site. */
 export function isSameDay(a: string | Date, b: string | Date, zone?: string): boolean {
-  const day = dateFormat('en-CA', { year: 'numeric', month: '2-digit', day: '2-digit', timeZone: zone })
-  return day.format(moment(a)) === day.format(moment(b))
+  return calendarDay(a, zone) === calendarDay(b, zone)
+}
+
+/** The calendar day of an instant at the site, `2026-03-13`, which compares as text. */
+export function calendarDay(at: string | Date, zone?: string): string {
+  return dateFormat('en-CA', { year: 'numeric', month: '2-digit', day: '2-digit', timeZone: zone }).format(moment(at))
 }
 
 /** "1.4 MB", in powers of 1000 as file managers say it. */

@@ -1,4 +1,4 @@
-import { QueryTypes } from 'sequelize'
+import { QueryTypes, Transaction } from 'sequelize'
 import { database } from '../../database/connection.ts'
 import { linkHash, type LedgerRow } from '../../database/ledger.ts'
 
@@ -6,7 +6,12 @@ type Stored = Omit<LedgerRow, 'at'> & { at: Date; previousHash: string; hash: st
 export type LedgerVerdict = { events: number; broken: { id: number; why: string } | null }
 
 /** Walks the chain of the whole and of each customer from the first event and names the first broken link. */
-export async function verifyLedger(): Promise<LedgerVerdict> {
+export function verifyLedger(): Promise<LedgerVerdict> {
+  // one snapshot for events and heads, or what is written meanwhile would look like a broken end
+  return database.transaction({ isolationLevel: Transaction.ISOLATION_LEVELS.REPEATABLE_READ }, walk)
+}
+
+async function walk(transaction: Transaction): Promise<LedgerVerdict> {
   let previous = ''
   let last = 0
   const customers = new Map<string, string>()
@@ -15,7 +20,7 @@ export async function verifyLedger(): Promise<LedgerVerdict> {
       `select id, type, subject, subject_id as "subjectId", job_id as "jobId", customer_id as "customerId", site_id as "siteId", person_id as "personId", request_id as "requestId",
         at, touches, data, previous_hash as "previousHash", hash, customer_previous_hash as "customerPreviousHash", customer_hash as "customerHash"
        from events where id > $1 order by id limit 1000`,
-      { bind: [last], type: QueryTypes.SELECT },
+      { bind: [last], type: QueryTypes.SELECT, transaction },
     )
     for (const row of rows) {
       const why = faultOf(row, previous, last, customers)
@@ -26,9 +31,12 @@ export async function verifyLedger(): Promise<LedgerVerdict> {
     }
     if (rows.length < 1000) break
   }
-  const heads = await database.query<{ chain: string; id: number; hash: string }>('select chain, event_id as id, hash from chain_heads', { type: QueryTypes.SELECT })
+  const heads = await database.query<{ chain: string; id: number; hash: string }>('select chain, event_id as id, hash from chain_heads', { type: QueryTypes.SELECT, transaction })
   const all = heads.find(({ chain }) => chain === 'all')
-  if (all && (all.id !== last || all.hash !== previous)) return { events: last, broken: { id: last + 1, why: 'events are missing from the end' } }
+  if (!all || all.id !== last || all.hash !== previous) return { events: last, broken: { id: last + 1, why: 'events are missing from the end' } }
+  for (const [customerId, hash] of customers) {
+    if (heads.find(({ chain }) => chain === customerId)?.hash !== hash) return { events: last, broken: { id: last + 1, why: `the end of the chain of customer ${customerId} is not what was written` } }
+  }
   return { events: last, broken: null }
 }
 

@@ -64,7 +64,8 @@ async function writeEntries(work: Work, planned: Planned, names: Names, site: Si
 /** The expected finish is that of the last step and one working day for review and report. */
 async function writeJobs(work: Work, planned: Planned, site: Site, tx: Tx): Promise<Change[]> {
   const touched: Change[] = []
-  for (const { id, finish } of planned.jobs) {
+  const waiting = [...new Set(work.held.map(({ jobId }) => jobId))].filter((id) => !planned.jobs.some((job) => job.id === id)).map((id) => ({ id, finish: null }))
+  for (const { id, finish } of [...planned.jobs, ...waiting]) {
     const job = work.jobs.get(id)!
     const isWhole = finish !== null && !planned.unplaced.some(({ step }) => work.steps.find((one) => one.id === step)?.jobId === id) && !work.held.some(({ jobId }) => jobId === id)
     const expectedAt = isWhole ? workingDaysOn(instantOf(finish), 1, 17, site.hours, site.timeZone) : null

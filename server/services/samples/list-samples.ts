@@ -20,8 +20,9 @@ export async function listSamples({ after, limit, search, state, jobId }: Filter
   if (state) where.push({ state })
   if (jobId) where.push({ jobId })
   if (search) {
-    const like = { [Op.like]: `${search.replace(/[\\%_]/g, '\\$&')}%` }
-    where.push({ [Op.or]: [{ heat: like }, { lot: like }, { number: like }, { code: like }] })
+    const like = `${search.replace(/[\\%_]/g, '\\$&')}%`
+    const inCapitals = { [Op.like]: like.toUpperCase() }
+    where.push({ [Op.or]: [{ heat: { [Op.iLike]: like } }, { lot: { [Op.iLike]: like } }, { number: inCapitals }, { code: inCapitals }] })
   }
   const samples = await Sample.findAll({ where: { [Op.and]: where }, order: [['id', 'DESC']], limit: limit + 1, raw: true })
   const shown = samples.slice(0, limit)

@@ -42,16 +42,17 @@ export async function runView(run: TestRun, caller: Caller): Promise<TestRunView
     })),
     evaluation: run.evaluation, remark: run.remark,
     reviews: reviews.map((review) => ({ id: review.id, outcome: review.outcome, remark: review.remark, readings: review.readings, at: review.createdAt.toISOString(), by: names.get(review.byId) ?? '' })),
-    notMineToReview: await whyNotMine(run, caller, site.timeZone), authorisedUntil: right, sameSample: others,
+    ...(await reviewRight(run, caller, site.timeZone)), authorisedUntil: right, sameSample: others,
   }
 }
 
-/** Why the caller may not review this run; empty when they may. */
-export async function whyNotMine(run: TestRun, caller: Caller, timeZone: string): Promise<string> {
+/** Why the caller may not review this run, empty when they may, and until when. */
+async function reviewRight(run: TestRun, caller: Caller, timeZone: string): Promise<Pick<TestRunView, 'notMineToReview' | 'mayReviewUntil'>> {
   const record = subject('TestRun', { siteId: run.siteId, performedById: run.performedById })
-  if (!caller.ability.can('review', record)) return caller.ability.relevantRuleFor('review', record)?.reason ?? 'You may not review runs.'
-  const until = await authorisedUntil(caller.person.id, run.methodId, 'review', timeZone)
-  return until ? '' : `You are not authorised to review ${methodOf(run.methodId)?.title ?? run.methodId}, or the authorisation has ended.`
+  if (!caller.ability.can('review', record)) return { notMineToReview: caller.ability.relevantRuleFor('review', record)?.reason ?? 'You may not review runs.', mayReviewUntil: null }
+  const mayReviewUntil = await authorisedUntil(caller.person.id, run.methodId, 'review', timeZone)
+  const notMineToReview = mayReviewUntil ? '' : `You are not authorised to review ${methodOf(run.methodId)?.title ?? run.methodId}, or the authorisation has ended.`
+  return { notMineToReview, mayReviewUntil }
 }
 
 async function namesOf(ids: string[]): Promise<Map<string, string>> {

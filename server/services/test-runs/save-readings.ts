@@ -45,6 +45,8 @@ function faultsOf(methodId: string, fresh: SaveReadings['keep'], strikes: SaveRe
   const faults: Record<string, string> = {}
   const known = new Set([...kept.map(({ reading }) => reading.key), ...fresh.map(({ key }) => key)])
   const struck = new Set(strikes.map(({ key }) => key))
+  for (const key of twice(fresh)) faults[`keep.${key}`] = 'stands twice in one save'
+  for (const key of twice(strikes)) faults[`strike.${key}`] = 'stands twice in one save'
   const taken = new Set(kept.filter(({ reading, strike }) => !strike && !struck.has(reading.key)).map(({ reading }) => reading.path))
   for (const { key } of strikes) if (!known.has(key)) faults[`strike.${key}`] = 'there is no such reading in this run'
   for (const { key, path, value } of fresh) {
@@ -54,4 +56,10 @@ function faultsOf(methodId: string, fresh: SaveReadings['keep'], strikes: SaveRe
     if (!struck.has(key)) taken.add(path)
   }
   return faults
+}
+
+/** Keys that one list names more than once. */
+function twice(list: readonly { key: string }[]): string[] {
+  const seen = new Set<string>()
+  return list.flatMap(({ key }) => (seen.size === seen.add(key).size ? [key] : []))
 }

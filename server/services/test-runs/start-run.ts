@@ -14,6 +14,7 @@ import { Bench } from '../../models/sites/bench.ts'
 import { Equipment } from '../../models/sites/equipment.ts'
 import { Site } from '../../models/sites/site.ts'
 import { latestVerifications } from '../equipment/latest-verifications.ts'
+import { dayIn } from '../jobs/day-in.ts'
 import { touchesOf } from '../samples/touches-of.ts'
 import { authorisedUntil } from './authorised-until.ts'
 import { runView } from './run-view.ts'
@@ -28,7 +29,7 @@ export async function startRun(testId: string, benchId: string, caller: Caller):
     if (test.state !== 'waiting' && test.state !== 'ready') throw new Problem('not-now', `this test is ${test.state}`)
     const bench = await loadOne(Bench, 'Bench', benchId, caller, { tx })
     const site = (await Site.findByPk(test.siteId, { raw: true, transaction: tx }))!
-    await mustBeUsable(bench, test, tx)
+    await mustBeUsable(bench, test, site, tx)
     const until = await authorisedUntil(caller.person.id, test.methodId, 'carry out', site.timeZone, tx)
     if (!until) throw new Problem('not-allowed', `You are not authorised to carry out ${methodOf(test.methodId)?.title ?? test.methodId}, or the authorisation has ended.`)
     const sample = (await Sample.findByPk(test.sampleId, { raw: true, transaction: tx, lock: tx.LOCK.UPDATE }))!
@@ -52,13 +53,13 @@ export async function startRun(testId: string, benchId: string, caller: Caller):
   return runView(await loadOne(TestRun, 'TestRun', id, caller), caller)
 }
 
-async function mustBeUsable(bench: Bench, test: Test, tx: Tx): Promise<void> {
+async function mustBeUsable(bench: Bench, test: Test, site: Site, tx: Tx): Promise<void> {
   if (bench.siteId !== test.siteId || !bench.does.some(({ kind }) => kind === test.methodId)) throw new Problem('not-acceptable', `${bench.name} does not do this test`, { benchId: 'cannot do this test' })
   if (bench.out) throw new Problem('not-now', `${bench.name} is out of use`)
   if (!bench.equipmentId) return
   const machine = (await Equipment.findByPk(bench.equipmentId, { raw: true, transaction: tx }))!
   if (machine.outOfUse) throw new Problem('not-now', `${machine.code} is out of use`)
-  if (machine.calibratedUntil && machine.calibratedUntil < new Date().toISOString().slice(0, 10)) throw new Problem('not-now', `the calibration of ${machine.code} ended on ${machine.calibratedUntil}`)
+  if (machine.calibratedUntil && machine.calibratedUntil < dayIn(site.timeZone, new Date())) throw new Problem('not-now', `the calibration of ${machine.code} ended on ${machine.calibratedUntil}`)
   const verified = (await latestVerifications([machine.id], tx)).get(machine.id)
   if (verified?.passed === false) throw new Problem('not-now', `${machine.code} failed its verification: ${verified.text}`)
 }

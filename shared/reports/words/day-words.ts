@@ -12,15 +12,15 @@ export function dayRange({ from, to }: { from: string; to: string }, timeZone: s
   return one.day === other.day ? dayWords(to, timeZone) : `${one.day} to ${dayWords(to, timeZone)}`
 }
 
-/** Day and time of day with the zone's offset: "13 Mar 2026, 15:52 (UTC+01:00)". */
+/** Day and time of day with the zone's offset: "13 Mar 2026, 15:52 UTC+1". */
 export function timeWords(at: string, timeZone: string): string {
   const { hour, minute, offset } = partsIn(at, timeZone)
-  return `${dayWords(at, timeZone)}, ${hour}:${minute} (${offset.replace('GMT', 'UTC')})`
+  return `${dayWords(at, timeZone)}, ${hour}:${minute} ${offset.replace('GMT', 'UTC').replace(/\+0$/, '')}`
 }
 
 function partsIn(at: string, timeZone: string) {
   const parts = new Intl.DateTimeFormat('en-US', {
-    timeZone, day: 'numeric', month: 'short', year: 'numeric', hour: '2-digit', minute: '2-digit', hourCycle: 'h23', timeZoneName: 'longOffset',
+    timeZone, day: 'numeric', month: 'short', year: 'numeric', hour: '2-digit', minute: '2-digit', hourCycle: 'h23', timeZoneName: 'shortOffset',
   }).formatToParts(new Date(at))
   const part = (type: Intl.DateTimeFormatPartTypes) => parts.find((one) => one.type === type)?.value ?? ''
   return { day: part('day'), month: part('month'), year: part('year'), hour: part('hour'), minute: part('minute'), offset: part('timeZoneName') }

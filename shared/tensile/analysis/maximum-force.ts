@@ -59,7 +59,7 @@ function within({ strain, stress }: StressStrain, index: number, from: number, l
     high = i
     take(i)
   }
-  return { from: strain[low]!, to: strain[high]!, mean: strain[index]! + total / count, count }
+  return { from: strain[low]!, to: strain[high]!, mean: strain[index]! + (count > 0 ? total / count : 0), count }
 }
 
 /** The mean of the last readings lies below the maximum by more than noise makes the highest of many readings stand out. */

@@ -62,7 +62,8 @@ export function createReadingQueue({ store, run: first, send, refetch, onRun, no
   const moment = () => (last = Math.max(last + 1, now()))
 
   async function open(): Promise<void> {
-    const found = await store.all(run.id)
+    closed = false
+    const found = await store.all(run.id).catch(() => { set({ isStored: false }); return [] })
     const here = new Set(state.unsent.map(nameOf))
     set({ unsent: [...found.filter((item) => !here.has(nameOf(item))), ...state.unsent] })
     await settle()
@@ -85,13 +86,18 @@ export function createReadingQueue({ store, run: first, send, refetch, onRun, no
     }
   }
 
+  /** What stays behind by a fault is known by its key and left out the next time. */
+  async function removed(items: readonly Unsent[]): Promise<void> {
+    await store.remove(items).catch(() => set({ isStored: false }))
+  }
+
   /** Leaves out what the server has, by key. */
   async function settle(): Promise<void> {
     const known = new Map(run.readings.map((reading) => [reading.key, reading]))
     const there = state.unsent.filter(({ kind, key }) => (kind === 'keep' ? known.has(key) : Boolean(known.get(key)?.struck)))
     if (there.length === 0) return set({})
     set({ unsent: state.unsent.filter((item) => !there.includes(item)), keptAt: now() })
-    await store.remove(there)
+    await removed(there)
   }
 
   async function see(fresh: TestRun): Promise<void> {
@@ -191,7 +197,7 @@ export function createReadingQueue({ store, run: first, send, refetch, onRun, no
     drop: async (key: string): Promise<void> => {
       const gone = state.unsent.filter((item) => item.key === key)
       set({ unsent: state.unsent.filter((item) => item.key !== key) })
-      await store.remove(gone)
+      await removed(gone)
       await push()
     },
     retry: async (): Promise<void> => {

@@ -8,7 +8,7 @@ import { curveOf } from '../../standards/records/read-record.ts'
 type Kind = 'rockwell' | 'tensile' | 'grain-intercept'
 export type WantedReport = { count?: number; kinds?: readonly Kind[]; requirement?: 'none' | 'met' | 'broken' | 'guarded'; struck?: boolean; mixed?: boolean; remark?: string; uncertain?: boolean }
 
-const record = () => curveOf('42CrMoS4/46NT71.csv', 78.5398, 50)
+const record = () => curveOf('42CrMoS4/46NT71.csv', 19.65852, 25)
 const labels: Record<Kind, string> = { rockwell: 'Rockwell HRC', tensile: 'Tensile', 'grain-intercept': 'Grain size, intercept' }
 
 /** What a run of each kind was given, a little different for every sample. */
@@ -17,8 +17,8 @@ export function inputFor(kind: Kind, at: number): { parameters: Record<string, u
   if (kind === 'rockwell') return { parameters: { standard: 'ASTM E18', scale: 'HRC', surface: { shape: 'flat' } }, readings: [31.2, 31.6, 31.0].map((value) => ({ value: Number((value + step).toFixed(1)) })) }
   if (kind === 'grain-intercept') return { parameters: { standard: 'ASTM E112' }, readings: [[2.512, 142], [2.512, 137], [2.512, 145], [2.512, 139], [2.512, 141]].map(([lineLengthMm, intersections]) => ({ lineLengthMm, intersections: intersections! + (at % 5) })) }
   return {
-    parameters: { standard: 'ISO 6892-1', offsetPercent: 0.2, section: { shape: 'round', diametersMm: [10.01, 10, 9.99] }, originalGaugeLengthMm: 50, extensometerGaugeLengthMm: 50 },
-    readings: { curve: record(), finalGaugeLengthMm: 57.6 + step, finalDiametersMm: [6.4, 6.42] },
+    parameters: { standard: 'ISO 6892-1', offsetPercent: 0.2, section: { shape: 'round', diametersMm: [5.003] }, originalGaugeLengthMm: 25, extensometerGaugeLengthMm: 25 },
+    readings: { curve: record(), finalGaugeLengthMm: 28.6 + step / 10, finalDiametersMm: [3.34, 3.36] },
   }
 }
 

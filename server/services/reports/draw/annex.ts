@@ -8,12 +8,12 @@ import { drawTable, type Cell, type Row } from './table.ts'
 
 const plain = (text: string, color?: string): Cell => ({ spans: [{ text, size: 8.5, ...(color && { color }) }] })
 const name = (text: string): Cell => ({ spans: [{ text, face: 'medium', size: 8.5 }] })
-const tight = { pad: mm(0.7), leading: 10.75 }
+const tight = { pad: mm(0.7), leading: 10.75, spread: mm(16) }
 
 /** Each sample with what is known of it, where they are not alike. */
 export function drawSamples(paper: Paper, { samples, site }: ReportContent): void {
   const kinds = new Set(samples.map(({ material, size, condition }) => JSON.stringify([material, size, condition])))
-  if (kinds.size < 2 && samples.every(({ remarks }) => remarks.length === 0)) return
+  if (kinds.size < 2 && samples.filter(({ remarks }) => remarks.length > 0).length <= 3) return
   const section = paper.section()
   paper.heading(section, 'Samples')
   drawTable(paper, section, {
@@ -88,7 +88,7 @@ export function drawReadings(paper: Paper, { readings }: ReportContent): void {
   const labels = [...new Set(readings.map(({ label }) => label))]
   const section = paper.section()
   for (const label of labels) {
-    const own = readings.filter((one) => one.label === label && (one.rows.length > 0 || one.struck.length > 0))
+    const own = readings.filter((one) => one.label === label && (one.rows.length > 0 || one.notes.length > 0))
     const shapes = [...new Set(own.map(({ columns }) => JSON.stringify(columns)))]
     for (const shape of shapes) {
       const columns = JSON.parse(shape) as string[]
@@ -105,29 +105,30 @@ type Group = ReportContent['readings']
 /** One value a reading: all readings of a sample in one row. */
 function listOf(columns: readonly string[], group: Group) {
   return {
-    ...tight, spread: false, gap: mm(5), columns: [{ align: 'left' as const }, { align: 'left' as const }], head: [{ cells: [name('Sample'), name(columns[0]!)] }],
-    body: group.flatMap(({ sample, rows, struck }) => [
-      { cells: [code(shortNumber(sample)), { spans: [{ text: rows.map(([value]) => value).join('   '), face: 'mono' as const, size: 8.5 }] }], ...(struck.length > 0 && { ruleBelow: null }) },
-      ...struckRows(struck, 2),
+    ...tight, spread: 0, gap: mm(5), columns: [{ align: 'left' as const }, { align: 'left' as const, most: mm(150) }], head: [{ cells: [name('Sample'), name(columns[0]!)] }],
+    body: group.flatMap(({ sample, rows, notes }) => [
+      { cells: [code(shortNumber(sample)), { spans: [{ text: rows.map(([value]) => value).join('   '), face: 'mono' as const, size: 8.5 }] }], ...(notes.length > 0 && { ruleBelow: null }) },
+      ...noteRows(notes, 2),
     ]),
   }
 }
 
+/** Several values a reading: a row for each. */
 function blocksOf(columns: readonly string[], group: Group) {
-  const named = columns[0] === 'Reading'
+  const numbered = group.some(({ rows }) => rows.length > 1)
   return {
-    ...tight, spread: !named, gap: mm(named ? 8 : 2), columns: [{ align: 'left' as const }, ...(named ? [] : [{ align: 'right' as const }]), ...columns.map((_, at) => ({ align: named ? ('left' as const) : ('right' as const), most: named && at === 1 ? mm(100) : mm(60) }))],
-    head: [{ cells: [name('Sample'), ...(named ? [] : [name('No.')]), ...columns.map(name)] }],
-    body: group.flatMap(({ sample, rows, struck }) => [
+    ...tight, columns: [{ align: 'left' as const }, ...(numbered ? [{ align: 'right' as const }] : []), ...columns.map(() => ({ align: 'right' as const, most: mm(32) }))],
+    head: [{ cells: [name('Sample'), ...(numbered ? [name('No.')] : []), ...columns.map(name)] }],
+    body: group.flatMap(({ sample, rows, notes }) => [
       ...rows.map((row, at): Row => ({
-        cells: [at === 0 ? code(shortNumber(sample)) : plain(''), ...(named ? [] : [plain(String(at + 1), quiet)]), ...row.map((text, nth): Cell => (named && nth === 0 ? plain(text) : { spans: [{ text, face: 'mono', size: 8.5 }] }))],
-        ...((at < rows.length - 1 || struck.length > 0) && { ruleBelow: null }),
+        cells: [at === 0 ? code(shortNumber(sample)) : plain(''), ...(numbered ? [plain(String(at + 1), quiet)] : []), ...row.map((text): Cell => ({ spans: [{ text, face: /^[\d.,−\- ]*$/.test(text) ? 'mono' : 'regular', size: 8.5 }] }))],
+        ...((at < rows.length - 1 || notes.length > 0) && { ruleBelow: null }),
       })),
-      ...struckRows(struck, columns.length + (named ? 1 : 2)),
+      ...noteRows(notes, columns.length + (numbered ? 2 : 1)),
     ]),
   }
 }
 
-function struckRows(struck: readonly string[], columns: number): Row[] {
-  return struck.map((text, at) => ({ cells: [plain(''), { span: columns - 1, align: 'left', spans: [{ text, size: 8.25, color: quiet }] }], ...(at < struck.length - 1 && { ruleBelow: null }) }))
+function noteRows(notes: readonly string[], columns: number): Row[] {
+  return notes.map((text, at) => ({ cells: [plain(''), { span: columns - 1, align: 'left', spans: [{ text, size: 8.25, color: quiet }] }], ...(at < notes.length - 1 && { ruleBelow: null }) }))
 }

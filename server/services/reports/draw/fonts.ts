@@ -17,17 +17,23 @@ const faces: Record<Face, { family: keyof typeof subsets; weight: 400 | 500 | 70
 /** pdfkit keeps the font that is chosen in `_font`; nothing public tells whether a font has a sign. */
 type WithFont = { _font: { font: { hasGlyphForCodePoint(point: number): boolean } } }
 
+type Run = { font: string; text: string; width: number }
+
 /** The fonts of one document: text is cut into runs, each in the first subset that holds all of its characters. */
 export class Fonts {
   private readonly registered = new Set<string>()
+  private readonly set = new Map<string, readonly Run[]>()
   private readonly places = new Map<string, string>()
   private readonly doc: Doc
   constructor(doc: Doc) {
     this.doc = doc
   }
 
-  /** Text in runs of one font each. What no font holds becomes a question mark. */
-  runs(text: string, face: Face): { font: string; text: string }[] {
+  /** Text in runs of one font each, with their widths at size 1. What no font holds becomes a question mark. */
+  runs(text: string, face: Face): readonly Run[] {
+    const key = `${face} ${text}`
+    const known = this.set.get(key)
+    if (known) return known
     const runs: { font: string; text: string }[] = []
     for (const character of text) {
       const font = this.fontOf(character, face)
@@ -37,7 +43,14 @@ export class Fonts {
       if (last?.font === name) last.text += shown
       else runs.push({ font: name, text: shown })
     }
-    return runs
+    const measured = runs.map((run) => ({ ...run, width: this.doc.font(run.font).fontSize(100).widthOfString(run.text) / 100 }))
+    this.set.set(key, measured)
+    return measured
+  }
+
+  /** Width at size 1. */
+  widthOf(text: string, face: Face): number {
+    return this.runs(text, face).reduce((sum, run) => sum + run.width, 0)
   }
 
   private fontOf(character: string, face: Face): string | null {

@@ -16,7 +16,7 @@ export function drawFoot(paper: Paper, content: ReportContent): void {
   const full = `${content.number}/${content.revision}`
   paper.tag(section, 'Figure', () => drawCode(paper, checkLink(content), page.left, bottom - size), { alt: `Data Matrix code with the address where report ${full} can be checked` })
   const x = page.left + size + mm(5)
-  const column = (width - size - mm(15) - mm(14)) / 2
+  const column = (width - size - mm(15) - mm(17)) / 2
   const lines: [string, 'medium' | 'regular'][] = [['Genuine and current?', 'medium'], ...paper.wrap([{ text: content.checkAddress, size: 8.25 }], column).map(({ spans }): [string, 'regular'] => [spans.map(({ text }) => text).join(''), 'regular'])]
   paper.tag(section, 'P', () => {
     for (const [at, [text, face]] of lines.entries()) paper.put([{ text, face, size: 8.25 }], x, baseline(bottom - (lines.length + 2 - at) * 11, 11, 8.25))

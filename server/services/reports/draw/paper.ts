@@ -1,7 +1,7 @@
 import PDFDocument from 'pdfkit'
 import type { ReportContent } from '../../../../shared/reports/content.ts'
 import { symbolParts } from '../../../../shared/reports/words/symbol-parts.ts'
-import { Fonts, fontFile, type Face } from './fonts.ts'
+import { Fonts, type Face } from './fonts.ts'
 import { hairline, ink, mm, page, width } from './ink.ts'
 
 type Doc = typeof PDFDocument.prototype
@@ -11,7 +11,7 @@ export type Line = { spans: Span[]; width: number }
 type Tagged = Parameters<Doc['struct']>[1]
 
 /** Where the first page ends for text: its foot holds code and signature. */
-const firstBottom = page.bottom - mm(26)
+const firstBottom = page.bottom - mm(23.5)
 const laterTop = page.top + mm(9)
 const laterBottom = page.bottom - mm(8)
 const usualSize = 9.25
@@ -31,7 +31,7 @@ export class Paper {
     const issued = new Date(content.dates.issued)
     // fixed dates and names: the same content gives the same bytes
     this.doc = new PDFDocument({
-      size: 'A4', margin: 0, bufferPages: true, pdfVersion: '1.7', ...accessible, tagged: true, lang: 'en-GB', displayTitle: true, font: fontFile('roboto-latin-400-normal'),
+      size: 'A4', margin: 0, bufferPages: true, pdfVersion: '1.7', ...accessible, tagged: true, lang: 'en-GB', displayTitle: true, font: '',
       info: {
         Title: `${content.title} ${content.number}/${content.revision}`, Author: content.company.name, Subject: content.title, Creator: 'Crosshead', Producer: 'Crosshead',
         CreationDate: issued, ModDate: issued,
@@ -81,7 +81,7 @@ export class Paper {
   }
 
   widthOf(spans: readonly Span[]): number {
-    return spans.reduce((sum, { text, face = 'regular', size = usualSize }) => sum + this.fonts.runs(text, face).reduce((part, run) => part + this.doc.font(run.font).fontSize(size).widthOfString(run.text), 0), 0)
+    return spans.reduce((sum, { text, face = 'regular', size = usualSize }) => sum + this.fonts.widthOf(text, face) * size, 0)
   }
 
   /** Sets one line with its baseline at `y`. */
@@ -89,9 +89,8 @@ export class Paper {
     let at = align === 'left' ? x : x + (within - this.widthOf(spans)) / (align === 'right' ? 1 : 2)
     for (const { text, face = 'regular', size = usualSize, color = ink, drop = 0 } of spans) {
       for (const run of this.fonts.runs(text, face)) {
-        this.doc.font(run.font).fontSize(size).fillColor(color)
-        this.doc.text(run.text, at, y + drop, { lineBreak: false, baseline: 'alphabetic' })
-        at += this.doc.widthOfString(run.text)
+        this.doc.font(run.font).fontSize(size).fillColor(color).text(run.text, at, y + drop, { lineBreak: false, baseline: 'alphabetic' })
+        at += run.width * size
       }
     }
   }
@@ -149,8 +148,11 @@ export class Paper {
   /** A heading under its rule; `keep` is what has to stand on the same page with it. */
   heading(parent: Element, text: string, keep = mm(20)): void {
     this.need(mm(8) + keep)
-    this.decor(() => this.rule(this.y, ink))
-    this.y += mm(2)
+    // at the top of a page the rule of the running head stands there already
+    if (this.pages === 1 || this.y > laterTop) {
+      this.decor(() => this.rule(this.y, ink))
+      this.y += mm(2)
+    }
     this.tag(parent, 'H2', () => this.put([{ text, face: 'bold' }], page.left, baseline(this.y, 12)))
     this.y += 12 + mm(1.5)
   }

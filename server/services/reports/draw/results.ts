@@ -4,6 +4,7 @@ import { symbolSpans, type Element, type Paper, type Span } from './paper.ts'
 import { drawTable, wantedWidths, type Cell, type Row, type TableOf } from './table.ts'
 
 type Part = ReportContent['columns']
+const verdictInset = mm(3)
 const verdicts = { pass: 'met', fail: 'not met', undecided: 'undecided' } as const
 
 /** The results table. Columns that do not fit beside each other go into further tables under the first, each with its samples. */
@@ -69,7 +70,7 @@ function headOf(results: Part, has: { heat: boolean; lot: boolean; verdict: bool
   }, [])
   return [
     ...(repeats ? [{ cells: [...Array.from({ length: before }, () => empty), ...groups.map(({ group, span }): Cell => ({ span, align: 'right', spans: [{ text: group, size: 8, color: quiet }] })), ...(has.verdict ? [empty] : [])] }] : []),
-    { cells: [name('Sample'), ...(has.heat ? [name('Heat')] : []), ...(has.lot ? [name('Lot')] : []), ...results.map(({ head, symbol }): Cell => ({ spans: head === symbol ? symbolSpans(head) : [{ text: head, face: 'medium', size: 8.5 }] })), ...(has.verdict ? [name('Requirement')] : [])] },
+    { cells: [name('Sample'), ...(has.heat ? [name('Heat')] : []), ...(has.lot ? [name('Lot')] : []), ...results.map(({ head, symbol }): Cell => ({ spans: head === symbol ? symbolSpans(head) : [{ text: head, face: 'medium', size: 8.5 }] })), ...(has.verdict ? [{ ...name('Requirement'), inset: verdictInset }] : [])] },
     { cells: [...Array.from({ length: before }, () => empty), ...results.map(({ unit, head }): Cell => ({ spans: unit === head ? [] : [{ text: written(unit), size: 8.5, color: quiet }] })), ...(has.verdict ? [empty] : [])] },
   ]
 }
@@ -81,8 +82,8 @@ function resultCell(cell: ReportContent['rows'][number]['cells'][string] | undef
 }
 
 function verdictCell(outcome: keyof typeof verdicts | null): Cell {
-  if (!outcome) return { spans: [{ text: 'none', size: 7.75, color: quiet }] }
-  return { sign: outcome, spans: [{ text: verdicts[outcome], ...(outcome === 'fail' && { face: 'bold' as const, color: red }) }] }
+  if (!outcome) return { inset: verdictInset, spans: [{ text: 'none', size: 7.75, color: quiet }] }
+  return { sign: outcome, inset: verdictInset, spans: [{ text: verdicts[outcome], ...(outcome === 'fail' && { face: 'bold' as const, color: red }) }] }
 }
 
 /** The last part of a sample's number; the job's number stands above. */

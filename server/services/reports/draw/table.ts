@@ -1,10 +1,10 @@
 import { hairline, ink, mm, page, width } from './ink.ts'
 import { baseline, type Element, type Paper, type Span } from './paper.ts'
 
-export type Cell = { spans: Span[]; span?: number; sign?: 'pass' | 'fail' | 'undecided'; align?: 'left' | 'right' }
-export type Row = { cells: Cell[]; ruleBelow?: string | null; group?: boolean }
+export type Cell = { spans: Span[]; span?: number; sign?: 'pass' | 'fail' | 'undecided'; /** Room at its left. */ inset?: number; align?: 'left' | 'right' }
+export type Row = { cells: Cell[]; ruleBelow?: string | null }
 export type Column = { align: 'left' | 'right'; /** Widest that text of this column gets before it is broken. */ most?: number }
-export type TableOf = { columns: Column[]; head: Row[]; body: Row[]; foot?: Row[]; /** Left, in points, before the columns share what is left over. */ gap?: number; pad?: number; leading?: number; spread?: boolean }
+export type TableOf = { columns: Column[]; head: Row[]; body: Row[]; foot?: Row[]; /** Left, in points, before the columns share what is left over. */ gap?: number; pad?: number; leading?: number; /** How much wider a column may become when there is room. */ spread?: number }
 
 const signWidth = 14
 
@@ -22,12 +22,13 @@ export function wantedWidths(paper: Paper, { columns, head, body, foot = [], gap
   return wanted.map((one, at) => one + (at < columns.length - 1 ? gap : 0))
 }
 
-const cellWidth = (paper: Paper, { spans, sign }: Cell) => paper.widthOf(spans) + (sign ? signWidth : 0) + 0.5
+const before = ({ sign, inset = 0 }: Cell) => inset + (sign ? signWidth : 0)
+const cellWidth = (paper: Paper, cell: Cell) => paper.widthOf(cell.spans) + before(cell) + 0.5
 
 /** Draws a table over as many pages as it needs; its head stands on each of them, read out once. */
 export function drawTable(paper: Paper, parent: Element, table: TableOf): void {
-  const { columns, head, body, foot = [], gap = mm(2), pad = mm(1.15), leading = 11.5, spread = true } = table
-  const widths = shared(wantedWidths(paper, table), spread)
+  const { columns, head, body, foot = [], gap = mm(2), pad = mm(1.15), leading = 11.5, spread = Infinity } = table
+  const widths = shared(wantedWidths(paper, table), columns, spread)
   const element = paper.doc.struct('Table')
   parent.add(element)
   const edges = widths.reduce<number[]>((all, one) => [...all, all.at(-1)! + one], [page.left])
@@ -38,7 +39,7 @@ export function drawTable(paper: Paper, parent: Element, table: TableOf): void {
     return row.cells.map((cell) => {
       const from = at
       at += cell.span ?? 1
-      const within = edges[at]! - edges[from]! - (at < columns.length ? gap : 0) - (cell.sign ? signWidth : 0)
+      const within = edges[at]! - edges[from]! - (at < columns.length ? gap : 0) - before(cell)
       return paper.wrap(cell.spans, Math.max(within, 8))
     })
   }
@@ -58,8 +59,8 @@ export function drawTable(paper: Paper, parent: Element, table: TableOf): void {
       // heads stand on their rule, text hangs from the top
       const top = type === 'TH' ? paper.y + height - text.length * leading : paper.y + (height - text.length * leading) / 2
       const set = () => {
-        if (cell.sign) drawSign(paper, cell.sign, edges[from]!, baseline(top, leading))
-        for (const [line, { spans }] of text.entries()) paper.put(trimmed(spans), edges[from]! + (cell.sign ? signWidth : 0), baseline(top + line * leading, leading, spans[0]?.size), { align, within: within - (cell.sign ? signWidth : 0) })
+        if (cell.sign) drawSign(paper, cell.sign, edges[from]! + (cell.inset ?? 0), baseline(top, leading))
+        for (const [line, { spans }] of text.entries()) paper.put(trimmed(spans), edges[from]! + before(cell), baseline(top + line * leading, leading, spans[0]?.size), { align, within: within - before(cell) })
       }
       if (tr) paper.tag(tr, type, set, type === 'TH' ? { scope: 'Column' } : {})
       else set()
@@ -86,25 +87,37 @@ export function drawTable(paper: Paper, parent: Element, table: TableOf): void {
     else paper.rule(paper.y, color)
   }
 
+  const rows = [...body, ...foot]
+  /** Rows without a rule between them, and the last of the table with what stands under it, stay on one page. */
+  const isTied = (at: number) => at >= 0 && at < rows.length - 1 && (rows[at]!.ruleBelow === null || (foot.length > 0 && at >= body.length - 1))
+  function tiedHeight(from: number): number {
+    let height = heightOf(rows[from]!, pad)
+    for (let at = from; isTied(at); at += 1) height += heightOf(rows[at + 1]!, pad)
+    return height
+  }
+
   const headHeight = head.reduce((sum, row) => sum + heightOf(row, 0), 0) + mm(2)
   paper.need(headHeight + body.slice(0, 2).reduce((sum, row) => sum + heightOf(row, pad), 0))
   drawHead(true)
-  for (const [nth, row] of [...body, ...foot].entries()) {
+  for (const [nth, row] of rows.entries()) {
     const last = nth === body.length + foot.length - 1
-    // rows under the table stand together with its last row
-    const together = nth === body.length - 1 ? foot.reduce((sum, one) => sum + heightOf(one, pad), heightOf(row, pad)) : heightOf(row, pad)
-    if (paper.need(together)) drawHead(false)
+    if (!isTied(nth - 1) && paper.need(Math.min(tiedHeight(nth), mm(120)))) drawHead(false)
+    else if (paper.need(heightOf(row, pad))) drawHead(false)
     draw(row, 'TD', pad, true)
     if (row.ruleBelow !== null || last) paper.decor(() => paper.rule(paper.y, row.ruleBelow ?? hairline))
   }
 }
 
-/** What is left over goes to all columns alike; what is too much is taken from the widest. */
-function shared(wanted: readonly number[], spread: boolean): number[] {
+/** What is left over goes to all columns alike, but not past the last column of text; what is too much is taken from the widest. */
+function shared(wanted: readonly number[], columns: readonly Column[], spread: number): number[] {
   const sum = wanted.reduce((total, one) => total + one, 0)
-  if (sum <= width) return spread ? wanted.map((one, at) => one + (at < wanted.length - 1 || wanted.length === 1 ? (width - sum) / Math.max(1, wanted.length - 1) : 0)) : [...wanted]
-  const level = widestLevel(wanted)
-  return wanted.map((one) => Math.min(one, level))
+  if (sum > width) {
+    const level = widestLevel(wanted)
+    return wanted.map((one) => Math.min(one, level))
+  }
+  const grows = wanted.map((_, at) => columns[at]!.align === 'right' || at < wanted.length - 1)
+  const extra = Math.min(spread, (width - sum) / Math.max(1, grows.filter(Boolean).length))
+  return wanted.map((one, at) => one + (grows[at] ? extra : 0))
 }
 
 /** The greatest width at which columns cut to it fit beside each other. */

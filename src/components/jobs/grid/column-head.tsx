@@ -3,6 +3,7 @@ import type { OrderColumn, OrderFault } from '../../../../shared/api/orders.ts'
 import { formFields } from '../../../../shared/method/form.ts'
 import type { Method } from '../../../../shared/method/method.ts'
 import { orderedTest } from '../../../../shared/orders/ordered-test.ts'
+import { asSentence } from '../../../lib/refused-field.ts'
 import { Button } from '../../ui/buttons/button.tsx'
 import { classNames } from '../../ui/class-names.ts'
 import { Popover } from '../../ui/feedback/popover.tsx'
@@ -11,7 +12,6 @@ import { Tick } from '../../ui/fields/tick.tsx'
 import { SchemaFields } from '../../ui/form/schema-fields.tsx'
 import { Icon } from '../../ui/icon.tsx'
 import { limitText } from '../../ui/limits/limit-rule.tsx'
-import { sentence } from '../order/row-faults.ts'
 import { LimitsForm } from './limits-form.tsx'
 
 export type ColumnDeeds = { change: (column: OrderColumn) => void; tickAll: (key: string, ticked: boolean) => void; remove: (key: string) => void }
@@ -50,12 +50,12 @@ export function ColumnPanel({ column, faults, deeds, trigger }: { column: OrderC
 
 function Parameters({ column, method, faults, onColumn }: { column: OrderColumn; method: Method; faults: readonly OrderFault[]; onColumn: (column: OrderColumn) => void }) {
   const fields = formFields(method.parameters).filter(({ name }) => !method.measured.includes(name))
-  const problems = Object.fromEntries(faults.filter(({ field }) => field.startsWith('parameters.')).map(({ field, message }) => [field.slice('parameters.'.length), sentence(message)]))
+  const problems = Object.fromEntries(faults.filter(({ field }) => field.startsWith('parameters.')).map(({ field, message }) => [field.slice('parameters.'.length), asSentence(message)]))
   const others = faults.filter(({ field }) => !field.startsWith('parameters.'))
   return (
     <div className="grid gap-4">
       <SchemaFields fields={fields} value={column.parameters} onValue={(parameters) => onColumn({ ...column, parameters })} problems={problems} />
-      {others.map(({ message }) => <FieldError key={message}>{sentence(message)}</FieldError>)}
+      {others.map(({ message }) => <FieldError key={message}>{asSentence(message)}</FieldError>)}
       <LimitsForm names={method.resultNames} mainResult={method.mainResult} value={column.requirement} onValue={(requirement) => onColumn({ ...column, requirement })} />
     </div>
   )

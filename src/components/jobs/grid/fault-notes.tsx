@@ -1,8 +1,9 @@
 import type { OrderColumn } from '../../../../shared/api/orders.ts'
 import { orderedTest } from '../../../../shared/orders/ordered-test.ts'
+import { asSentence } from '../../../lib/refused-field.ts'
 import { Button } from '../../ui/buttons/button.tsx'
 import { Note } from '../../ui/feedback/note.tsx'
-import { sentence, type RowFault } from '../order/row-faults.ts'
+import type { RowFault } from '../draft/row-faults.ts'
 
 export type Cure = {
   override: (key: string, parameters: Record<string, unknown>) => void
@@ -19,7 +20,7 @@ export function FaultNotes({ faults, columns, cure, id }: { faults: readonly Row
         const cell = fault.cell ?? (column ? 'size' : null)
         return (
           <Note
-            key={place} kind="bad" title={sentence(fault.message)} className="whitespace-normal"
+            key={place} kind="bad" title={asSentence(fault.message)} className="whitespace-normal"
             actions={
               (column || cell) && (
                 <>

@@ -6,8 +6,8 @@ import { IconButton } from '../../ui/buttons/icon-button.tsx'
 import { classNames } from '../../ui/class-names.ts'
 import { Menu } from '../../ui/feedback/menu.tsx'
 import { Tick } from '../../ui/fields/tick.tsx'
-import { cellNames, cellText, type CellName, type DraftRow } from '../order/draft-state.ts'
-import type { RowFault } from '../order/row-faults.ts'
+import { cellNames, cellText, type CellName, type DraftRow } from '../draft/draft-state.ts'
+import type { RowFault } from '../draft/row-faults.ts'
 import { FaultNotes } from './fault-notes.tsx'
 
 export type RowDeeds = {

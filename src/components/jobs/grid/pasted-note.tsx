@@ -5,8 +5,8 @@ import { Popover } from '../../ui/feedback/popover.tsx'
 import { SelectField } from '../../ui/fields/select-field.tsx'
 import type { OrderColumn } from '../../../../shared/api/orders.ts'
 import { orderedTest } from '../../../../shared/orders/ordered-test.ts'
-import { cellNames } from '../order/draft-state.ts'
-import { pastedWords, type Pasted, type PastedColumn } from '../order/paste-table.ts'
+import { cellNames } from '../draft/draft-state.ts'
+import { pastedWords, type Pasted, type PastedColumn } from '../draft/paste-table.ts'
 
 /** What came of pasting: how many rows, how their columns were read, what could not be read, and the ways back. */
 export function PastedNote({ pasted, tests, firstRow, onColumns, onUndo, onClose }: {

@@ -1,7 +1,7 @@
 import { useRef, useState, type KeyboardEvent, type RefObject } from 'react'
-import { cellNames, withTick, type CellName } from '../order/draft-state.ts'
-import type { OrderDraft } from '../order/use-order-draft.ts'
-import { filledDown } from '../order/use-row-deeds.ts'
+import { cellNames, withTick, type CellName } from '../draft/draft-state.ts'
+import type { OrderDraft } from '../draft/use-order-draft.ts'
+import { filledDown } from '../draft/use-row-deeds.ts'
 import { controlAt, moveOf, placeOf, type GridPlace } from './grid-moves.ts'
 
 /** Cells of one column chosen together with Shift and the arrows, from where the cursor began. */

@@ -5,7 +5,7 @@ import { Button } from '../../ui/buttons/button.tsx'
 import { Note } from '../../ui/feedback/note.tsx'
 import { Live } from '../../ui/live.tsx'
 import type { usePlaceJob } from './place-job.tsx'
-import type { OrderDraft } from './use-order-draft.ts'
+import type { OrderDraft } from '../draft/use-order-draft.ts'
 
 /** Where what was typed is: here, on the server, or both. */
 export function SavingWords({ saving: { busy, unsaved, savedAt, trouble }, zone }: { saving: OrderDraft['saving']; zone: string }) {

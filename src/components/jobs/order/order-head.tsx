@@ -4,7 +4,7 @@ import { DateField } from '../../ui/fields/date-field.tsx'
 import { SelectField } from '../../ui/fields/select-field.tsx'
 import { TextField } from '../../ui/fields/text-field.tsx'
 import { Attachments } from './attachments.tsx'
-import type { DraftHead } from './draft-state.ts'
+import type { DraftHead } from '../draft/draft-state.ts'
 
 /** What holds for the whole order: its number at the customer's, the day, what becomes of the samples, drawings. */
 export function OrderHead({ job, head, onHead }: { job: Job; head: DraftHead; onHead: (change: Partial<DraftHead>, mark: string) => void }) {

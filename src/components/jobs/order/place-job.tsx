@@ -4,7 +4,7 @@ import { usePayJob } from '../../../api/jobs.ts'
 import { Refusal } from '../../../lib/refusal.ts'
 import { Button } from '../../ui/buttons/button.tsx'
 import { Icon } from '../../ui/icon.tsx'
-import type { OrderDraft } from './use-order-draft.ts'
+import type { OrderDraft } from '../draft/use-order-draft.ts'
 
 /** What stops an order, with a way to it. */
 export type Stopper = { words: string; go?: () => void }

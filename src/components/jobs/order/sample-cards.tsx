@@ -13,10 +13,10 @@ import { AddTest } from '../grid/add-test.tsx'
 import { ColumnPanel, requirementWords } from '../grid/column-head.tsx'
 import { FaultNotes } from '../grid/fault-notes.tsx'
 import type { RowDeeds } from '../grid/grid-row.tsx'
-import { cellText, type DraftRow, type DraftState } from './draft-state.ts'
-import { rowFaults, type RowFault } from './row-faults.ts'
-import type { OrderDraft } from './use-order-draft.ts'
-import { useRowDeeds } from './use-row-deeds.ts'
+import { cellText, type DraftRow, type DraftState } from '../draft/draft-state.ts'
+import { rowFaults, type RowFault } from '../draft/row-faults.ts'
+import type { OrderDraft } from '../draft/use-order-draft.ts'
+import { useRowDeeds } from '../draft/use-row-deeds.ts'
 
 const shownFirst = 3
 

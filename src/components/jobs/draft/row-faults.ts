@@ -26,9 +26,3 @@ function cellOf(field: string): CellName | null {
   if (field.startsWith('piece.')) return 'size'
   return cellNames.find((cell) => cell === field) ?? null
 }
-
-/** "a bar needs its diameter" as a sentence of its own. */
-export function sentence(text: string): string {
-  const capital = text.charAt(0).toUpperCase() + text.slice(1)
-  return /[.!?]$/.test(capital) ? capital : `${capital}.`
-}

@@ -1,0 +1,1 @@
+export function EquipmentPage() { return <p>REPLACE-ME</p> }

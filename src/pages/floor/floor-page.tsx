@@ -1,0 +1,1 @@
+export function FloorPage() { return <p>REPLACE-ME</p> }

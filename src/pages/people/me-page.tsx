@@ -1,0 +1,1 @@
+export function MePage() { return <p>REPLACE-ME</p> }

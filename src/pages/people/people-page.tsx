@@ -1,0 +1,1 @@
+export function PeoplePage() { return <p>REPLACE-ME</p> }

@@ -1,0 +1,1 @@
+export function ReceivePage() { return <p>REPLACE-ME</p> }
