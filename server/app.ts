@@ -22,6 +22,7 @@ import { fileRoutes } from './routes/files.ts'
 import { jobRoutes } from './routes/jobs.ts'
 import { paymentNoticeRoute, paymentRoutes } from './routes/payments.ts'
 import { peopleRoutes } from './routes/people.ts'
+import { reportRoutes } from './routes/reports.ts'
 import { sampleRoutes } from './routes/samples.ts'
 import { checkPassword, sessionRoutes } from './routes/sessions.ts'
 import { testRunRoutes } from './routes/test-runs.ts'
@@ -29,7 +30,7 @@ import { testRunRoutes } from './routes/test-runs.ts'
 /** A process that stops ends the streams first, lets other requests finish, then closes what the app keeps open. */
 export type App = Express & { endStreams(): void; close(): Promise<void> }
 
-const operations = [sessionRoutes, peopleRoutes, evaluationRoutes, jobRoutes, paymentRoutes, sampleRoutes, benchRoutes, testRunRoutes, fileRoutes]
+const operations = [sessionRoutes, peopleRoutes, evaluationRoutes, jobRoutes, paymentRoutes, sampleRoutes, benchRoutes, testRunRoutes, reportRoutes, fileRoutes]
 
 /** The whole HTTP side of the product. Needs `setOutside` before. */
 export function createApp(): App {

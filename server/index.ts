@@ -24,7 +24,7 @@ announceWith((ledgerId) => void redis.publish(channel, String(ledgerId)).catch((
 
 const app = createApp()
 const server = createServer({ headersTimeout: 20_000, requestTimeout: 300_000, keepAliveTimeout: 65_000 }, app)
-server.listen(settings.PORT, '127.0.0.1', () => log.info({ port: settings.PORT }, 'listening'))
+server.listen(settings.PORT, settings.HOST, () => log.info({ port: settings.PORT }, 'listening'))
 server.on('error', (error) => {
   log.fatal({ error: error.message }, 'cannot listen')
   process.exit(1)

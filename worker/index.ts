@@ -1,4 +1,3 @@
-import { createServer } from 'node:http'
 import { Redis } from 'ioredis'
 import { pino } from 'pino'
 import { announceWith } from '../server/database/announce.ts'
@@ -26,15 +25,11 @@ const asked = { lockMs: milliseconds('WORKER_LOCK_MS'), sweepMs: milliseconds('W
 const running = startWorker({ redisUrl: settings.REDIS_URL, prefix, tasks, sweeps, log, pace: Object.fromEntries(Object.entries(asked).filter(([, value]) => value !== undefined)) })
 log.info('the worker is running')
 
-/** Says that it lives, for whoever supervises it. */
-const health = process.env.WORKER_HEALTH_PORT ? createServer((_req, res) => res.end('ok')).listen(Number(process.env.WORKER_HEALTH_PORT), '127.0.0.1') : null
-
 let stopping = false
 for (const signal of ['SIGINT', 'SIGTERM'] as const) {
   process.on(signal, () => {
     if (stopping) return
     stopping = true
-    health?.close()
     void running.stop().then(async () => {
       integrations.mail.close()
       redis.disconnect()

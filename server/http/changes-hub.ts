@@ -117,7 +117,7 @@ function write(res: Response, text: string): void {
   if (res.writableLength > mostWaiting) res.destroy()
 }
 
-function mayKnow(caller: Caller, { subject: name, id }: Change, { customerId, siteId }: Told): boolean {
-  const record = { id, customerId: customerId ?? undefined, siteId: siteId ?? undefined, personId: id, visibleToCustomer: true }
+function mayKnow(caller: Caller, { subject: name, id }: Change, { customerId, siteId, jobState }: Told): boolean {
+  const record = { id, customerId: customerId ?? undefined, siteId: siteId ?? undefined, personId: id, visibleToCustomer: true, ...(name === 'Job' && { state: jobState ?? undefined }) }
   return caller.ability.can('read', subject(name as SubjectName, record) as never)
 }

@@ -10,7 +10,7 @@ import { lastLedgerId } from '../../server/services/ledger/read-ledger.ts'
 import { endpoints } from '../../shared/endpoints.ts'
 import { startTestApp, type Agent } from '../support/app.ts'
 import { buildHouse } from '../support/build/house.ts'
-import { buildDraft, buildOffers } from '../support/build/jobs.ts'
+import { buildDraft, buildOffers, buildPlacedJob } from '../support/build/jobs.ts'
 import { callerFor } from '../support/caller.ts'
 import { cookieOf, openStream, type Stream } from '../support/stream.ts'
 
@@ -35,7 +35,7 @@ async function house() {
 describe('the stream of changes', () => {
   it('tells the customer and their lab of a job and nobody else', async () => {
     const [here, there] = [await house(), await house()]
-    const [draft, other] = [await buildDraft(here), await buildDraft(there)]
+    const [draft, other] = [await buildPlacedJob(here), await buildPlacedJob(there)]
     const own = await open(here.client)
     const lab = await open(here.manager)
     const strangers = [await open(there.client), await open(there.technician), await open(there.manager)]
@@ -48,6 +48,16 @@ describe('the stream of changes', () => {
     for (const stream of [own, lab]) expect(stream.text()).not.toContain(other.id)
     for (const stream of [own, ...strangers]) expect(stream.text()).not.toContain('bent')
     expect(own.changes()).toContainEqual({ subject: 'Job', id: draft.id })
+  })
+
+  it('keeps a draft between the customer and their paper', async () => {
+    const here = await house()
+    const [client, manager] = [await open(here.client), await open(here.manager)]
+    const draft = await buildDraft(here)
+    const placed = await buildPlacedJob(here)
+    for (const stream of [client, manager]) await stream.until((text) => text.includes(placed.id))
+    expect(client.text()).toContain(draft.id)
+    expect(manager.text()).not.toContain(draft.id)
   })
 
   it('says no more than what changed', async () => {
@@ -94,9 +104,9 @@ describe('the stream of changes', () => {
     const here = await house()
     const stream = await open(here.client, { 'Last-Event-ID': '999999999' })
     const later = await open(here.manager)
-    const draft = await buildDraft(here)
-    await stream.until((text) => text.includes(draft.id))
-    await later.until((text) => text.includes(draft.id))
+    const job = await buildPlacedJob(here)
+    await stream.until((text) => text.includes(job.id))
+    await later.until((text) => text.includes(job.id))
     for (const nonsense of ['-5', 'abc', '1e99']) await (await open(here.client, { 'Last-Event-ID': nonsense })).until((text) => text.includes('event: hello'))
   })
 
@@ -160,18 +170,19 @@ describe('the stream of changes', () => {
 describe('the events of a job', () => {
   it('are paged from the newest, and refuse a mark that is none', async () => {
     const here = await house()
-    const draft = await buildDraft(here)
+    const job = await buildPlacedJob(here)
     const manager: Agent = await app.agentFor(here.manager)
-    const { body: first } = await manager.get(`/api/jobs/${draft.id}/events?limit=1`).expect(200)
-    expect(first.items.map(({ type, by }: { type: string; by: string }) => [type, by])).toEqual([['job.order-changed', here.client.name]])
-    const { body: rest } = await manager.get(`/api/jobs/${draft.id}/events?limit=1&after=${first.next}`).expect(200)
-    expect(rest.items.map(({ type }: { type: string }) => type)).toEqual(['job.drafted'])
+    const read = async (after?: string) => (await manager.get(`/api/jobs/${job.id}/events`).query({ limit: 2, ...(after && { after }) }).expect(200)).body
+    const first = await read()
+    expect(first.items.map(({ type, by }: { type: string; by: string | null }) => [type, by])).toEqual([['payment.received', null], ['job.placed', null]])
+    const rest = await read(first.next)
+    expect(rest.items.map(({ type, by }: { type: string; by: string }) => [type, by])).toEqual([['job.order-changed', here.client.name], ['job.drafted', here.client.name]])
     expect(rest.next).toBeNull()
     for (const after of ['abc', '1.5', 'Infinity', '-1', '99999999999999999999']) {
-      const { body } = await manager.get(`/api/jobs/${draft.id}/events?after=${after}`).expect(422)
+      const { body } = await manager.get(`/api/jobs/${job.id}/events?after=${after}`).expect(422)
       expect(body.fields).toHaveProperty('after')
     }
-    await (await app.agentFor((await house()).manager)).get(`/api/jobs/${draft.id}/events`).expect(404)
+    await (await app.agentFor((await house()).manager)).get(`/api/jobs/${job.id}/events`).expect(404)
   })
 })
 

@@ -17,6 +17,11 @@ export function startProcess(entry: 'server/index.ts' | 'worker/index.ts', setti
   return watch(spawn(process.execPath, ['--import', 'tsx', entry], { env: { ...process.env, LOG_LEVEL: 'warn', ...settings }, stdio: ['ignore', 'pipe', 'pipe'] }))
 }
 
+/** A program of the build, as `npm start` runs it, with nothing but the given settings. */
+export function startBuilt(bundle: string, settings: Record<string, string>): Running {
+  return watch(spawn(process.execPath, ['--enable-source-maps', join('.build', bundle)], { env: { PATH: process.env.PATH, LOG_LEVEL: 'warn', NODE_ENV: 'production', ...settings }, stdio: ['ignore', 'pipe', 'pipe'] }))
+}
+
 function watch(child: ChildProcess): Running {
   running.add(child)
   let said = ''

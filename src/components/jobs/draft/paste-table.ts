@@ -71,7 +71,7 @@ function fillRow(row: DraftRow, cells: readonly string[], columns: readonly Past
     next = withCell(next, cell, text(cell).slice(0, longest))
   }
   if (columns.includes('form') && text('form') !== '') next = withCell(next, 'form', text('form'))
-  const size = text('size') || [text('diameter') && `Ø ${text('diameter').replace(/^[Øø⌀]\s*/, '')}`, text('thickness'), text('width')].filter(Boolean).join(' × ')
+  const size = text('size') || sizeOf(text('diameter'), text('thickness'), text('width'))
   if (size !== '') next = withCell(next, 'size', size)
   for (const cell of ['form', 'size'] as const) {
     const why = unreadWords(next, cell)
@@ -83,6 +83,13 @@ function fillRow(row: DraftRow, cells: readonly string[], columns: readonly Past
     next = { ...next, sample: { ...next.sample, tests: [...others, ...ticks.filter(({ on }) => on).map(({ key }) => key)] } }
   }
   return next
+}
+
+/** A diameter that stands alone is read like any size: lists call a sheet's thickness so too. */
+function sizeOf(diameter: string, thickness: string, width: string): string {
+  const flat = [thickness, width].filter((part) => part !== '')
+  if (diameter === '' || flat.length === 0) return [diameter, ...flat].filter((part) => part !== '').join(' × ')
+  return [`Ø ${diameter.replace(/^[Øø⌀]\s*/, '')}`, ...flat].join(' × ')
 }
 
 function isTick(text: string): boolean {

@@ -24,9 +24,9 @@ export function ColumnHead({ column, first, ticked, rows, faults, deeds }: { col
       <ColumnPanel
         column={column} faults={faults} deeds={deeds}
         trigger={
-          <button type="button" className="block w-full pr-6 text-left hover:[&_b]:underline">
-            <b className={classNames('block text-13 font-bold', faults.length > 0 ? 'text-red' : 'text-ink')}>{faults.length > 0 && <Icon name="stop" className="mr-1 inline size-3.5! align-[-2px]" />}{label}</b>
-            <span className="block">{columnSummary(column)}</span>
+          <button type="button" className="block w-full text-left hover:[&_b]:underline">
+            <b className={classNames('block pr-5 text-13 font-bold', faults.length > 0 ? 'text-red' : 'text-ink')}>{faults.length > 0 && <Icon name="stop" className="mr-1 inline size-3.5! align-[-2px]" />}{label}</b>
+            <span className="line-clamp-2" title={columnSummary(column)}>{columnSummary(column)}</span>
             <span className="block">{requirementWords(column)}</span>
           </button>
         }

@@ -1,0 +1,2 @@
+/** Whether `.build` was made from the sources as they are. */
+export function isBuilt(): boolean
