@@ -24,7 +24,7 @@ export default defineConfig({
   },
   test: {
     projects: [
-      { test: { name: 'unit', environment: 'node', include: ['tests/{shared,standards,architecture,fakes}/**/*.test.ts'] } },
+      { test: { name: 'unit', environment: 'node', include: ['tests/{shared,standards,architecture,fakes}/**/*.test.ts'], testTimeout: 60_000 } },
       {
         test: {
           name: 'server',

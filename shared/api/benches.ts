@@ -1,7 +1,6 @@
 import * as z from 'zod'
-import { Day, Id, Instant } from './basics.ts'
+import { Day, Id, Instant, Traveller } from './basics.ts'
 import { endpoint } from './endpoint.ts'
-import { Traveller } from './travellers.ts'
 
 export const EquipmentState = z.object({
   id: Id, code: z.string(), name: z.string(), kind: z.string(), siteId: Id, siteName: z.string(), calibratedUntil: Day.nullable(), certificate: z.string(), outOfUse: z.boolean(),

@@ -1,9 +1,8 @@
 import * as z from 'zod'
 import { Piece } from '../method/piece.ts'
-import { Day, Id, Instant, Money, OptionalText, page, PageQuery, Text, Version } from './basics.ts'
+import { Day, Id, Instant, Money, OptionalText, page, PageQuery, Text, Traveller, Version } from './basics.ts'
 import { endpoint } from './endpoint.ts'
 import { afterwardsChoices, Order, Quote, Requirement } from './orders.ts'
-import { Traveller } from './travellers.ts'
 import { Currency, JobState, MoneyState, ReportState, SampleState, TestState } from './words.ts'
 
 /** A job as a row of a list. `what` and `tests` say its content in words. */

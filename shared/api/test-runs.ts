@@ -1,11 +1,10 @@
 import * as z from 'zod'
 import { Piece } from '../method/piece.ts'
-import { Day, Id, Instant, OptionalText, Text, Version } from './basics.ts'
+import { Day, Id, Instant, OptionalText, Text, Traveller, Version } from './basics.ts'
 import { EquipmentState } from './benches.ts'
 import { endpoint } from './endpoint.ts'
 import { Evaluation } from './evaluations.ts'
 import { Requirement } from './orders.ts'
-import { Traveller } from './travellers.ts'
 import { RunState } from './words.ts'
 
 /** One thing kept at the bench: a row of a set, a named reading, or a measured parameter. Never edited, only struck out. */

@@ -2,7 +2,7 @@ import type { ReportContent } from './content.ts'
 
 /** What a revision says differently from the one before, in words; empty when it would say the same (ISO/IEC 17025:2017, 7.8.8). */
 export function changesBetween(earlier: ReportContent, now: ReportContent): string[] {
-  const same = (one: unknown, other: unknown) => JSON.stringify(one) === JSON.stringify(other)
+  const same = (one: unknown, other: unknown) => sorted(one) === sorted(other)
   const whole = (what: string, pick: (content: ReportContent) => unknown) => (same(pick(earlier), pick(now)) ? [] : [what])
   return [
     ...whole('the laboratory\'s name or address', ({ company, site }) => [company, site]),
@@ -35,4 +35,9 @@ function resultChanges(earlier: ReportContent, now: ReportContent): string[] {
     const [old, own] = [before.get(sample)?.[key]?.reported, cells[key]?.reported]
     return old === own ? [] : [`${symbol} of sample ${sample}: ${own ?? 'none'}, was ${old ?? 'none'}`]
   }))
+}
+
+/** As text in which the order of keys does not matter: the database keeps its own. */
+function sorted(value: unknown): string {
+  return JSON.stringify(value, (_key, one: unknown) => (typeof one === 'object' && one !== null && !Array.isArray(one) ? Object.fromEntries(Object.entries(one).sort(([a], [b]) => (a < b ? -1 : 1))) : one))
 }

@@ -1,6 +1,9 @@
+import type { Result } from '../method/method.ts'
+import { significant } from '../units/significant.ts'
 import type { ReportContent } from './content.ts'
 import { limitsOf, resultIn, together, type ResultColumn } from './results-table.ts'
 import type { ReportedTest } from './reported.ts'
+import { numberIn } from './words/number-in.ts'
 import { sampleList } from './words/sample-list.ts'
 
 const rules = {
@@ -20,7 +23,7 @@ export function conformityStatement(tests: readonly ReportedTest[], columns: rea
     outcome, findings,
     statement: outcome === 'pass' ? 'Every limit that was ordered is met.' : outcome === 'fail' ? 'Not every limit that was ordered is met.' : 'Every limit is met or undecided; none is broken.',
     rule: used.map((rule) => `Decision rule, as ordered${used.length > 1 ? ` for ${[...new Set(ruled(rule).map(({ label }) => label))].join(', ')}` : ''}: ${rules[rule]}.`).join(' '),
-    limits: columns.flatMap((column) => { const limits = limitsOf(column); return limits.length > 1 ? [`${column.group}, ${column.symbol}: ${limits.map(({ text, samples }) => `${text} for ${sampleList(samples)}`).join('; ')}`] : [] }),
+    limits: columns.flatMap((column) => { const limits = limitsOf(column); return limits.length > 1 ? [`${column.group}${column.group.includes(column.symbol) ? '' : `, ${column.symbol}`}: ${limits.map(({ text, samples }) => `${text} for ${sampleList(samples)}`).join('; ')}`] : [] }),
   }
 }
 
@@ -29,7 +32,14 @@ function finding(test: ReportedTest, column: ResultColumn): string[] {
   const result = resultIn(test, column)
   if (!limit || limit.outcome === 'pass') return []
   const band = [limit.lower !== undefined && `at least ${limit.lower}`, limit.upper !== undefined && `at most ${limit.upper}`].filter(Boolean).join(' and ')
-  const what = `Sample ${test.sample.split('-').at(-1)}, ${column.group}, ${column.symbol}`
+  const what = `Sample ${test.sample.split('-').at(-1)}, ${column.group}${column.group.includes(column.symbol) ? '' : `, ${column.symbol}`}`
   if (!result) return [`${what}: no result, undecided; ${band} was asked for.`]
-  return [`${what}: ${result.reported} ${limit.outcome === 'fail' ? 'does not meet its limit' : result.expandedUncertainty === undefined ? 'is undecided, since its uncertainty is not stated' : 'lies within its guard band and is undecided'}; ${band} was asked for.`]
+  const why = limit.outcome === 'fail' ? 'does not meet its limit' : result.expandedUncertainty === undefined ? 'is undecided, since its uncertainty is not stated' : 'lies within its guard band and is undecided'
+  return [`${what}: ${result.reported}${unrounded(result, limit)} ${why}; ${band} was asked for.`]
+}
+
+/** A result that is rounded onto its limit needs its further digits to be understood. */
+function unrounded({ reported, value }: Result, { outcome, lower = -Infinity, upper = Infinity }: { outcome: string; lower?: number; upper?: number }): string {
+  const printed = Number(numberIn(reported))
+  return outcome === 'fail' && printed >= lower && printed <= upper ? ` (unrounded ${significant(value, 6)})` : ''
 }

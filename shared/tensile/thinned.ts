@@ -23,7 +23,8 @@ export function thinned(x: ArrayLike<number>, y: ArrayLike<number>, columns: num
       if ((y[last] ?? 0) > (y[high] ?? 0)) high = last
     }
     const outside = column < 0 || (range !== undefined && (x[first] ?? 0) > to && (x[last] ?? 0) > to)
-    const wanted = outside ? [first, last] : [first, Math.min(low, high), Math.max(low, high), last]
+    // of a stretch outside, only the points next to the picture: a record goes on far beyond its elastic end
+    const wanted = outside ? [...(first > 0 ? [first] : []), ...(last < count - 1 ? [last] : [])] : [first, Math.min(low, high), Math.max(low, high), last]
     let before = -1
     for (const i of wanted) {
       if (i > before) keep(i)

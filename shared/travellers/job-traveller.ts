@@ -1,4 +1,4 @@
-import type { Traveller, TravellerNode } from '../api/travellers.ts'
+import type { Traveller, TravellerNode } from '../api/basics.ts'
 import type { StepKind } from '../method/method.ts'
 import { closedNode, isTesting, placedNode, reportNode, type JobNow } from './sample-traveller.ts'
 

@@ -1,4 +1,4 @@
-import type { Traveller, TravellerNode } from '../api/travellers.ts'
+import type { Traveller, TravellerNode } from '../api/basics.ts'
 import type { JobState, ReportState, SampleState, StepState, TestState } from '../api/words.ts'
 import type { StepKind } from '../method/method.ts'
 

@@ -26,7 +26,8 @@ it('has index files only where a process starts', () => {
 it('suppresses no rule without a reason on the same line, and never uses any', () => {
   const marks = all.filter((file) => !file.startsWith('tests/architecture/')).flatMap((file) => textOf(file).split('\n').flatMap((line, at) => {
     const suppressed = /eslint-disable|@ts-expect-error/.exec(line)
-    const bare = /@ts-ignore|@ts-nocheck|: any\b|\bas any\b/.test(line) || (suppressed && !/-- \S|: \S/.test(line))
+    const code = line.replace(/\/\*.*?\*\/|\/\/.*|^\s*\*.*|'[^']*'/g, '')
+    const bare = /@ts-ignore|@ts-nocheck/.test(line) || /: any\b|\bas any\b|<any\b/.test(code) || (suppressed !== null && !/-- \S|: \S/.test(line))
     return bare ? [`${file}:${at + 1}`] : []
   }))
   expect(marks).toEqual([])
@@ -35,7 +36,8 @@ it('suppresses no rule without a reason on the same line, and never uses any', (
 it('keeps method names inside shared, the list of views and the seeds excepted', () => {
   const ids = files.filter((file) => file.startsWith('shared/')).flatMap((file) => [...textOf(file).matchAll(/defineMethod\(\{\s*id: '([^']+)'/g)].map((match) => match[1]!))
   expect(ids.length).toBeGreaterThanOrEqual(3)
-  const exempt = (file: string) => file.startsWith('shared/') || file.startsWith('server/database/seeds/') || file === 'src/methods/views.ts'
+  // words that a password must not consist of are no names of methods
+  const exempt = (file: string) => file.startsWith('shared/') || file.startsWith('server/database/seeds/') || file === 'src/methods/views.ts' || file.endsWith('/check-password.ts')
   expect(files.filter((file) => !exempt(file) && ids.some((id) => textOf(file).includes(`'${id}'`)))).toEqual([])
 })
 

@@ -11,8 +11,8 @@ export const desk: Screen = { width: 1440, height: 900 }
 export type People = {
   /** A browser of this person's own at the given address, signed in by the form. */
   signIn(email: string, screen?: Screen): Promise<Page>
-  /** A browser where nobody is signed in. */
-  visit(screen?: Screen): Promise<Page>
+  /** A browser that knows nobody, or what another one knew. */
+  visit(screen?: Screen, known?: BrowserContextOptions['storageState']): Promise<Page>
   /** Lets the console say what this test brings about on purpose, such as a cut line. */
   expectWords(words: RegExp): void
 }
@@ -56,7 +56,7 @@ export async function openBrowser(address: string): Promise<People> {
       await page.waitForURL((url) => url.pathname !== '/' && url.pathname !== '/sign-in')
       return page
     },
-    visit: (screen = desk) => open(screen),
+    visit: (screen = desk, known) => open(screen, { storageState: known }),
     expectWords: (words) => { expected.push(words) },
   }
 }

@@ -1,3 +1,4 @@
+import { customerRole } from '../../../shared/access/customer-role.ts'
 import { outside } from '../../integrations/outside.ts'
 import { Company } from '../../models/people/company.ts'
 import { Hold } from '../../models/jobs/hold.ts'
@@ -13,7 +14,7 @@ export async function mailHold(holdId: string): Promise<void> {
   const job = await Job.findByPk(hold.jobId, { raw: true, rejectOnEmpty: true })
   const sample = hold.sampleId ? await Sample.findByPk(hold.sampleId, { raw: true }) : null
   const company = await Company.findOne({ raw: true })
-  const clients = await Person.findAll({ where: { role: 'client', customerId: hold.customerId, state: 'active' }, order: [['id', 'ASC']], raw: true })
+  const clients = await Person.findAll({ where: { role: customerRole, customerId: hold.customerId, state: 'active' }, order: [['id', 'ASC']], raw: true })
   const what = sample ? `sample ${sample.number}` : `job ${job.number}`
   const failures: unknown[] = []
   for (const { id, email, name } of clients) {

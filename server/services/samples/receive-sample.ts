@@ -23,7 +23,7 @@ export async function receiveSample(sampleId: string, { version, condition, mism
     if (job.state === 'cancelled' || job.state === 'draft') throw new Problem('not-now', `job ${job.number} is ${job.state}`)
     await Sample.update({ state: 'received', condition, receivedAt: new Date(), receivedById: caller.person.id, version: sample.version + 1 }, { where: { id: sample.id }, transaction: tx })
     await Job.update({ state: 'in work' }, { where: { id: job.id, state: { [Op.in]: ['placed', 'awaiting samples'] } }, transaction: tx })
-    tx.record({ type: 'sample.received', id: sample.id, jobId: sample.jobId, customerId: sample.customerId, siteId: sample.siteId, data: { number: sample.number, condition }, touches: touchesOf({ jobId: sample.jobId, sampleId }) })
+    tx.record({ type: 'sample.received', id: sample.id, jobId: sample.jobId, customerId: sample.customerId, siteId: sample.siteId, data: { number: sample.number, condition }, touches: [...touchesOf({ jobId: sample.jobId, sampleId }), { subject: 'PlanEntry', id: sampleId }] })
     if (mismatch) await placeHold({ ...mismatch, sample }, caller, tx)
   })
   return sampleView(sampleId, caller)

@@ -16,7 +16,7 @@ export async function reportMissing(sampleId: string, { version, remark }: { ver
     if (sample.state !== 'expected') throw new Problem('not-now', `sample ${sample.number} is ${sample.state} already`)
     mustBeCurrent(sample, version, 'This sample')
     await Sample.update({ state: 'missing', version: sample.version + 1 }, { where: { id: sample.id }, transaction: tx })
-    tx.record({ type: 'sample.missing', id: sample.id, jobId: sample.jobId, customerId: sample.customerId, siteId: sample.siteId, data: { number: sample.number, remark }, touches: touchesOf({ jobId: sample.jobId, sampleId }) })
+    tx.record({ type: 'sample.missing', id: sample.id, jobId: sample.jobId, customerId: sample.customerId, siteId: sample.siteId, data: { number: sample.number, remark }, touches: [...touchesOf({ jobId: sample.jobId, sampleId }), { subject: 'PlanEntry', id: sampleId }] })
     await placeHold({ sample, reason: `it was not in the parcel.${remark ? ` ${remark}` : ''}`, question: 'When does it come, or do we go on without it?', answers: ['It follows', 'Go on without it'] }, caller, tx)
   })
   return sampleView(sampleId, caller)

@@ -1,6 +1,6 @@
 import { Op, QueryTypes } from 'sequelize'
 import type { SampleInJob } from '../../../shared/api/jobs.ts'
-import type { Traveller } from '../../../shared/api/travellers.ts'
+import type { Traveller } from '../../../shared/api/basics.ts'
 import type { JobNow } from '../../../shared/travellers/sample-traveller.ts'
 import { database } from '../../database/connection.ts'
 import { Job } from '../../models/jobs/job.ts'

@@ -1,9 +1,7 @@
+import type { CorrectionTable } from './correction-table.ts'
 import type { RockwellScale } from './rockwell-scale.ts'
 import { cylinderBall } from '../tables/cylinder-ball.ts'
 import { cylinderCone } from '../tables/cylinder-cone.ts'
-
-/** Corrections for readings on convex cylinders as printed: columns by diameter, rows by reading. */
-export type CorrectionTable = { diametersMm: readonly number[]; rows: readonly { reading: number; corrections: readonly number[] }[] }
 
 /** The scales that ASTM E18 prints a table for which this program holds. */
 const tableFor: Partial<Record<RockwellScale, CorrectionTable>> = {

@@ -1,4 +1,4 @@
-import type { CorrectionTable } from '../rockwell/cylinder-correction.ts'
+import type { CorrectionTable } from '../rockwell/correction-table.ts'
 
 /**
  * ASTM E18-22, corrections to be added to readings on convex cylinders: HRB, HRF and HRG (1/16 in ball), in HR units.

@@ -1,4 +1,4 @@
-import type { CorrectionTable } from '../rockwell/cylinder-correction.ts'
+import type { CorrectionTable } from '../rockwell/correction-table.ts'
 
 /**
  * ASTM E18-22, corrections to be added to readings on convex cylinders: HRC, HRA and HRD, in HR units.

@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react'
 import type { EquipmentState } from '../../../shared/api/benches.ts'
-import type { Traveller } from '../../../shared/api/travellers.ts'
+import type { Traveller } from '../../../shared/api/basics.ts'
 import type { Piece } from '../../../shared/method/piece.ts'
 import { sizeText } from '../../../shared/orders/size-text.ts'
 import { formatDay, formatTime, isSameDay } from '../../lib/format.ts'

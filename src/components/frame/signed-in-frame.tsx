@@ -1,5 +1,5 @@
 import { useQueryClient, useSuspenseQuery } from '@tanstack/react-query'
-import { Suspense, useState } from 'react'
+import { Suspense, useCallback, useMemo, useRef, useState } from 'react'
 import { Navigate, Outlet, useLocation, useNavigate } from 'react-router-dom'
 import { useFindCode } from '../../api/samples.ts'
 import { sessionQuery, useSignOut } from '../../api/session.ts'
@@ -7,7 +7,7 @@ import { useLive } from '../../lib/live.ts'
 import { PageFrame } from '../shell/page-frame.tsx'
 import { Strip } from '../shell/strip.tsx'
 import { useToast } from '../ui/feedback/toast-region.tsx'
-import { FrameContext } from './frame-context.ts'
+import { FrameContext, type TakeCode } from './frame-context.ts'
 import { pagesFor } from './pages-for.ts'
 
 /** Pages that set their own margins. */
@@ -23,16 +23,22 @@ export function SignedInFrame() {
   const findCode = useFindCode()
   const say = useToast()
   const [hereDetail, setHereDetail] = useState<string>()
+  const takeCode = useRef<TakeCode>(undefined)
+  const setTakeCode = useCallback((take: TakeCode | undefined) => { takeCode.current = take }, [])
+  const frame = useMemo(() => ({ setHereDetail, setTakeCode }), [setTakeCode])
   useLive(client, me !== null)
   if (!me) return <Navigate to="/sign-in" replace state={{ from: location.pathname + location.search }} />
 
   const pages = pagesFor(me).map((page) => ({ ...page, current: location.pathname.startsWith(page.to) }))
   const open = (code: string) => findCode.mutate(code.trim(), {
-    onSuccess: ({ subject, id }) => void navigate({ Sample: `/samples/${id}`, Job: `/jobs/${id}`, Report: `/reports?open=${id}` }[subject]),
+    onSuccess: (found) => {
+      const { subject, id } = found
+      if (!takeCode.current?.(found)) void navigate({ Sample: `/samples/${id}`, Job: `/jobs/${id}`, Report: `/reports?open=${id}` }[subject])
+    },
     onError: (error) => say({ text: error.message, kind: 'bad' }),
   })
   return (
-    <FrameContext value={{ setHereDetail }}>
+    <FrameContext value={frame}>
       <PageFrame
         layout={bare.test(location.pathname) ? 'bare' : 'page'}
         strip={

@@ -22,9 +22,12 @@ export function ResultsTable({ run, explained, onExplain }: { run: TestRun; expl
   const columns: Column<Row>[] = [
     {
       id: 'symbol', head: '', name: 'Result', nowrap: true,
-      cell: ({ key, symbol, result }) => (result && run.evaluation ? (
-        <Explained result={result} open={key === explained} onExplain={() => onExplain(key)} className="min-h-small underline decoration-edge"><SymbolText>{symbol}</SymbolText></Explained>
-      ) : <SymbolText>{symbol}</SymbolText>),
+      cell: ({ key, symbol, name, result }) => (
+        <>
+          {result ? <Explained result={result} open={key === explained} onExplain={() => onExplain(key)} className="-my-1 min-h-small underline decoration-edge"><SymbolText>{symbol}</SymbolText></Explained> : <SymbolText>{symbol}</SymbolText>}
+          {name !== symbol && <span className="ml-2 text-13 text-quiet max-tablet:hidden">{name}</span>}
+        </>
+      ),
     },
     { id: 'value', head: 'Value', numeric: true, nowrap: true, cell: ({ result }) => (result ? figureOf(result.reported).figure : <span className="text-quiet">not worked out</span>) },
     ...(hasUncertainty ? [{ id: 'uncertainty', head: '± U', numeric: true, nowrap: true, cell: ({ result }: Row) => (result?.expandedUncertainty === undefined ? '' : formatNumber(Number(result.expandedUncertainty.toPrecision(2)))) }] : []),

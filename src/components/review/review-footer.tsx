@@ -16,7 +16,7 @@ export function ReviewFooter({ run, busy, error, onSendBack, onAccept }: { run: 
   const refusal = reviewRefusal(run)
   const last = run.reviews.at(-1)
   return (
-    <footer className="sticky bottom-0 z-5 flex flex-wrap items-center justify-between gap-x-6 gap-y-2.5 border-t border-line bg-paper px-8 py-3 max-tablet:px-gutter">
+    <footer className="sticky bottom-0 z-5 flex items-center justify-between gap-x-6 max-tablet:flex-wrap gap-y-2.5 border-t border-line bg-paper px-8 py-3 max-tablet:px-gutter">
       <p className="flex min-w-0 items-start gap-2 text-13 text-quiet" role={error ? 'alert' : undefined}>
         <Icon name={error ? 'stop' : refusal ? 'lock' : 'check'} className={error ? 'mt-px text-red' : 'mt-px'} />
         <span className={error ? 'text-red' : undefined}>
@@ -24,7 +24,7 @@ export function ReviewFooter({ run, busy, error, onSendBack, onAccept }: { run: 
         </span>
       </p>
       {(run.state === 'recorded' || run.state === 'open') && (
-        <div className="ml-auto flex flex-wrap gap-3 max-tablet:ml-0 max-tablet:w-full max-tablet:[&>*]:flex-1">
+        <div className="ml-auto flex flex-none gap-3 max-tablet:ml-0 max-tablet:w-full max-tablet:[&>*]:flex-1">
           <Button size="big" refusal={refusal} refusalAt="hidden" onClick={onSendBack}>Send back…</Button>
           <Button kind="main" size="big" keys="Ctrl Enter" busy={busy} refusal={refusal} refusalAt="hidden" onClick={onAccept} className="[&>kbd]:max-tablet:hidden">Accept run</Button>
         </div>

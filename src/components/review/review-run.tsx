@@ -53,7 +53,7 @@ export function ReviewRun({ run, onDone }: { run: TestRun; onDone: () => void })
   const may = reviewRefusal(run) === ''
   useKeys({ e: explainNext, escape: () => explain(closed), ...(may && { b: () => setSendingBack(true), 'ctrl enter': () => !review.isPending && accept() }) })
   return (
-    <section aria-label="Run" className={`grid min-w-0 content-start wide:min-h-full wide:grid-rows-[auto_auto_1fr_auto] ${explained ? 'wide:grid-cols-[minmax(0,1fr)_408px]' : 'grid-cols-[minmax(0,1fr)]'} max-wide:grid-cols-[minmax(0,1fr)]`}>
+    <section aria-label="Run" className={`grid min-w-0 content-start desk:border-l desk:border-line wide:min-h-full wide:grid-rows-[auto_auto_1fr_auto] ${explained ? 'wide:grid-cols-[minmax(0,1fr)_408px]' : 'grid-cols-[minmax(0,1fr)]'} max-wide:grid-cols-[minmax(0,1fr)]`}>
       <header className="px-8 pt-5 pb-3.5 max-tablet:px-gutter">
         <h1 className="text-26 font-medium tracking-[-.014em]"><span className="mono">{run.sampleNumber}</span> {method?.label(run.parameters) ?? run.methodId}, run {run.number}</h1>
         <p className="mt-0.5 flex flex-wrap gap-x-4 text-[0.875rem]/5.5 text-quiet">

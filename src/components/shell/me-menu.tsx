@@ -1,7 +1,7 @@
 import { themes, useTheme } from '../../lib/theme.ts'
 import { Icon } from '../ui/icon.tsx'
 import { Menu, type MenuItem } from '../ui/feedback/menu.tsx'
-import type { StripPage } from './strip.tsx'
+import type { StripPage } from './strip-page.ts'
 
 const themeLabels = { light: 'Light', dark: 'Dark', system: 'As the system' }
 

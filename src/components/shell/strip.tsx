@@ -3,9 +3,7 @@ import { Link } from 'react-router-dom'
 import { ScanField } from '../ui/fields/scan-field.tsx'
 import { BrandMark } from './brand-mark.tsx'
 import { MeMenu } from './me-menu.tsx'
-
-/** A page of the strip. `current` marks where I am; `count` says how much waits there. */
-export type StripPage = { to: string; label: string; current?: boolean; count?: number }
+import type { StripPage } from './strip-page.ts'
 
 export type StripProps = {
   /** Site or organisation, and after it the bench. */

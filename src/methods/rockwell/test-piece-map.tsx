@@ -32,7 +32,6 @@ export function TestPieceMap({ scale, readings, checks }: { scale: RockwellScale
         { id: 'y', head: 'y', unit: 'mm', numeric: true, cell: ({ yMm }) => formatNumber(yMm, 2) }, { id: 'd', head: 'Diameter of the print', unit: 'mm', numeric: true, cell: (point) => formatNumber(point.d, 2) },
       ]} />}
     >
-      <path d={`M${x(from.x)} ${y(from.y) + 4}H${x(to.x)}`} className="hair dash2" />
       {points.map(({ place, xMm, yMm, d: diameter }) => {
         const isBad = bad.has(place)
         const ring = half * diameter * perMm

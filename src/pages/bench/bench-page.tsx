@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
-import { useState } from 'react'
+import { useCallback, useState } from 'react'
 import { useNavigate, useParams, useSearchParams } from 'react-router-dom'
 import type { Queue } from '../../../shared/api/benches.ts'
 import { queueQuery } from '../../api/benches.ts'
@@ -7,7 +7,7 @@ import { BenchQueue } from '../../components/bench/bench-queue.tsx'
 import { BenchSheet } from '../../components/bench/bench-sheet.tsx'
 import { KeysDialog } from '../../components/bench/keys-dialog.tsx'
 import { rememberBench } from '../../components/bench/my-bench.ts'
-import { useHereDetail } from '../../components/frame/frame-context.ts'
+import { useHereDetail, useTakeCode, type TakeCode } from '../../components/frame/frame-context.ts'
 import { ButtonLink } from '../../components/ui/buttons/button-link.tsx'
 import { useKeys } from '../../components/ui/buttons/use-keys.ts'
 import { MessageCard } from '../../components/ui/feedback/message-card.tsx'
@@ -39,6 +39,11 @@ function Bench({ queue }: { queue: Queue }) {
     const after = items.slice(at + 1).find(({ isHere, onHold }) => isHere && !onHold) ?? items.find(({ isHere, onHold, stepId }) => isHere && !onHold && stepId !== item?.stepId) ?? items[at + 1]
     open(after?.stepId)
   }
+  useTakeCode(useCallback<TakeCode>(({ id }) => {
+    const scanned = items.find(({ sampleId, isHere, onHold }) => sampleId === id && isHere && !onHold) ?? items.find(({ sampleId }) => sampleId === id)
+    if (scanned) setSearch({ step: scanned.stepId })
+    return scanned !== undefined
+  }, [items, setSearch]))
   useKeys({ n: next, '?': () => setKeysOpen(true) })
   return (
     <div className="grid min-h-[calc(100dvh-56px)] grid-cols-[304px_minmax(0,1fr)] max-desk:grid-cols-[minmax(0,1fr)] max-desk:grid-rows-[auto_1fr]">

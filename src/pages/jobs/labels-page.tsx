@@ -22,7 +22,7 @@ export function LabelsPage() {
             />
           </div>
           <div className="flex flex-wrap gap-[3mm] print:gap-[1mm]">
-            {found.labels.map((label) => <SampleLabel key={label.number} label={label} customerName={found.customerName} siteName={found.siteName} />)}
+            {found.labels.map((label) => <SampleLabel key={label.number} label={label} customerName={found.customerName} />)}
           </div>
         </>
       )}

@@ -39,7 +39,7 @@ function Content({ sample }: { sample: Sample }) {
           <>
             <State state={sample.state} className="text-ink" />
             {sample.onHold && <Flag>on hold</Flag>}
-            <span>{sample.now}</span>
+            {!sample.onHold && <span>{sample.now}</span>}
           </>
         }
         actions={
@@ -49,7 +49,7 @@ function Content({ sample }: { sample: Sample }) {
           </>
         }
       />
-      {open.map((hold) => <HoldQuestion key={hold.id} hold={hold} zone={zone} />)}
+      {open.length > 0 && <div className="mb-8">{open.map((hold) => <HoldQuestion key={hold.id} hold={hold} zone={zone} />)}</div>}
       <SideSection title="Traveller">
         <TravellerLine size="l" nodes={sample.traveller} zone={zone} onPhone="upright" />
       </SideSection>

@@ -28,7 +28,7 @@ describe('a named reading', () => {
   it('is taken by its name and checked', () => {
     expect(checkEntry(tensile, 'readings.maximumForceN', 52_000)).toBeNull()
     expect(checkEntry(tensile, 'readings.maximumForceN', -1)).toEqual(expect.any(String))
-    expect(checkEntry(tensile, 'readings.curve', { extensionMm: [0, 1], forceN: [0] })).toMatch(/^extensionMm: has 2 points/)
+    expect(checkEntry(tensile, 'readings.curve', { extensionMm: [0, 1, 2, 3], forceN: [0, 1, 2] })).toMatch(/^extensionMm: has 4 points, but the force has 3/)
   })
   it.each(['constructor', 'toString', '__proto__', 'hasOwnProperty', 'nothing', '0'])('is not known by the name %s', (name) => {
     expect(checkEntry(tensile, `readings.${name}`, 1)).toBe('is not known here')

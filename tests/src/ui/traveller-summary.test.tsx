@@ -1,6 +1,6 @@
 import { cleanup, render, screen, within } from '@testing-library/react'
 import { afterEach, describe, expect, it, vi } from 'vitest'
-import type { TravellerNode } from '../../../shared/api/travellers.ts'
+import type { TravellerNode } from '../../../shared/api/basics.ts'
 import { TravellerLine } from '../../../src/components/ui/traveller/traveller-line.tsx'
 import { travellerSummary } from '../../../src/components/ui/traveller/traveller-summary.ts'
 import { travellerTime } from '../../../src/components/ui/traveller/traveller-time.ts'

@@ -8,7 +8,7 @@ import { curveOf } from '../../standards/records/read-record.ts'
 type Kind = 'rockwell' | 'tensile' | 'grain-intercept'
 export type WantedReport = { count?: number; kinds?: readonly Kind[]; requirement?: 'none' | 'met' | 'broken' | 'guarded'; struck?: boolean; mixed?: boolean; remark?: string; uncertain?: boolean }
 
-const record = () => curveOf('42CrMoS4/46NT71.csv', 19.65852, 25)
+const curve = curveOf('42CrMoS4/46NT71.csv', 19.65852, 25)
 const labels: Record<Kind, string> = { rockwell: 'Rockwell HRC', tensile: 'Tensile', 'grain-intercept': 'Grain size, intercept' }
 
 /** What a run of each kind was given, a little different for every sample. */
@@ -18,7 +18,7 @@ export function inputFor(kind: Kind, at: number): { parameters: Record<string, u
   if (kind === 'grain-intercept') return { parameters: { standard: 'ASTM E112' }, readings: [[2.512, 142], [2.512, 137], [2.512, 145], [2.512, 139], [2.512, 141]].map(([lineLengthMm, intersections]) => ({ lineLengthMm, intersections: intersections! + (at % 5) })) }
   return {
     parameters: { standard: 'ISO 6892-1', offsetPercent: 0.2, section: { shape: 'round', diametersMm: [5.003] }, originalGaugeLengthMm: 25, extensometerGaugeLengthMm: 25 },
-    readings: { curve: record(), finalGaugeLengthMm: 28.6 + step / 10, finalDiametersMm: [3.34, 3.36] },
+    readings: { curve, finalGaugeLengthMm: 28.6 + step / 10, finalDiametersMm: [3.34, 3.36] },
   }
 }
 

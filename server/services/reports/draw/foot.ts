@@ -56,8 +56,8 @@ export function drawPageNumbers(paper: Paper, content: ReportContent): void {
 
 /** A clear end, so that a missing page is noticed (ISO/IEC 17025:2017, 7.8.2.1 d). */
 export function drawEnd(paper: Paper, { number, revision }: ReportContent): void {
-  paper.need(mm(10))
-  paper.y += mm(3)
+  // below the last line there is always room for it
+  paper.y += mm(1.5)
   const section = paper.section()
   const text = [{ text: `End of report ${number}/${revision}`, size: 8.5, color: quiet }]
   const side = (width - paper.widthOf(text)) / 2 - mm(3)

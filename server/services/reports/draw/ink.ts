@@ -9,6 +9,7 @@ export const ink = '#1E2226'
 export const quiet = '#5C6369'
 export const hairline = '#D9D6CD'
 export const edge = '#7E8285'
+export const wash = '#EDEBE4'
 export const red = '#B3261E'
 export const amber = '#865800'
 export const temper = {

@@ -13,7 +13,7 @@ type Tagged = Parameters<Doc['struct']>[1]
 /** Where the first page ends for text: its foot holds code and signature. */
 const firstBottom = page.bottom - mm(23.5)
 const laterTop = page.top + mm(9)
-const laterBottom = page.bottom - mm(8)
+const laterBottom = page.bottom - mm(10)
 const usualSize = 9.25
 
 /** PDF/UA-1: pdfkit knows it, its types do not yet. */

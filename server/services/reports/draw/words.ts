@@ -2,7 +2,8 @@ import type { ReportContent } from '../../../../shared/reports/content.ts'
 import { mm, red } from './ink.ts'
 import type { Paper, Span } from './paper.ts'
 
-const most = 40
+/** Most results that are named one by one; all are marked in the table. */
+const most = 12
 
 /** Conformity with its decision rule, deviations, and what every report has to say. */
 export function drawWords(paper: Paper, { conformity, deviations, statements }: ReportContent): void {

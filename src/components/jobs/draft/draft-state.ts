@@ -46,11 +46,12 @@ export function cellText({ sample, unread, size }: DraftRow, cell: CellName): st
 
 /** A row with a cell typed anew. A form or size that cannot be read is kept as text, and the sample keeps what it had before. */
 export function withCell(row: DraftRow, cell: CellName, text: string): DraftRow {
-  if (cell === 'size') return withSize(row, row.sample.piece.form, text)
+  if (cell === 'size') return row.unread.form === undefined ? withSize(row, row.sample.piece.form, text) : { ...row, size: text }
   if (cell !== 'form') return { ...row, sample: { ...row.sample, [cell]: text } }
   const form = readForm(text)
-  if (!form) return { ...row, unread: { ...row.unread, form: text } }
   const size = cellText(row, 'size')
+  // a size is read by its form; without one it waits as text, so that the order never holds a size of the wrong form
+  if (!form) return { ...row, sample: { ...row.sample, piece: { form: row.sample.piece.form } }, size, unread: { ...row.unread, form: text } }
   const { form: _read, ...unread } = row.unread
   return withSize({ ...row, unread }, form, form === row.sample.piece.form ? size : size.replace(/^[Øø⌀]\s*/, ''))
 }
@@ -64,6 +65,7 @@ function withSize(row: DraftRow, form: Piece['form'], text: string): DraftRow {
 
 /** When the cursor leaves a size, it is written as the trade writes it. */
 export function tidied(row: DraftRow): DraftRow {
+  if (row.unread.form !== undefined) return row
   const { size: _typed, ...rest } = row
   return rest
 }

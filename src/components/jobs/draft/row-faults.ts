@@ -15,7 +15,7 @@ export function rowFaults({ rows }: Pick<DraftState, 'rows'>, faults: readonly O
     const row: DraftRow | undefined = fault.row === null ? undefined : rows[fault.row]
     if (!row) continue
     const cell = cellOf(fault.field)
-    if (cell === 'size' && row.unread.size !== undefined) continue
+    if (cell === 'size' && (row.unread.size !== undefined || row.unread.form !== undefined)) continue
     const own = found.get(row.id) ?? []
     found.set(row.id, [...own, { cell, column: fault.column, message: fault.message, cures: fault.cures, wait: fault.column === null }])
   }

@@ -39,18 +39,18 @@ function Answer({ hold }: { hold: Hold }) {
     if (answer) send.mutate({ holdId: hold.id, version: hold.version, answer })
   }
   return (
-    <form className="mt-2.5" onSubmit={(event) => { event.preventDefault(); submit() }}>
+    <form className="mt-2.5 flex flex-wrap items-center gap-x-6 gap-y-3 max-tablet:flex-col max-tablet:items-stretch" onSubmit={(event) => { event.preventDefault(); submit() }}>
       <RadioGroup
         legend="Your answer" legendHidden across value={chosen} onValue={setChosen} error={asked && !chosen ? 'Choose an answer, or write your own.' : undefined}
         choices={[...hold.answers.map((value) => ({ value, label: value })), { value: ownWords, label: hold.answers.length > 0 ? 'something else' : 'in your own words' }]}
       />
       {chosen === ownWords && (
         <TextField
-          className="mt-2 max-w-[560px]" label="Your answer in your own words" labelHidden placeholder="Your answer" maxLength={1000} value={words} onChange={(event) => setWords(event.target.value)}
+          className="min-w-72 flex-1 max-tablet:min-w-0" label="Your answer in your own words" labelHidden placeholder="Your answer" maxLength={1000} value={words} onChange={(event) => setWords(event.target.value)}
           error={refusedField(send.error, 'answer') ?? (asked && !answer ? 'Write your answer first.' : undefined)}
         />
       )}
-      <Button kind="main" type="submit" size="tiny" className="mt-3 max-tablet:min-h-touch max-tablet:w-full" busy={send.isPending}>Send answer</Button>
+      <Button kind="main" type="submit" size="tiny" className="max-tablet:min-h-touch" busy={send.isPending}>Send answer</Button>
       {refusalWords(send.error, ['answer']) && <FieldError>{refusalWords(send.error, ['answer'])}</FieldError>}
     </form>
   )

@@ -46,11 +46,11 @@ function OpenSample({ sample, zone, mayAnswer, onFold }: { sample: SampleInJob; 
 
 function FoldedSample({ sample, onOpen }: { sample: SampleInJob; onOpen: () => void }) {
   return (
-    <li className="grid grid-cols-[52px_minmax(150px,auto)_minmax(0,1fr)_minmax(120px,auto)_28px] items-center gap-x-4 gap-y-1 border-b border-line py-3 max-tablet:grid-cols-[44px_minmax(0,1fr)_auto_28px]">
+    <li className="grid grid-cols-[52px_minmax(150px,auto)_minmax(0,1fr)_minmax(120px,auto)_28px] items-center gap-x-4 gap-y-1 border-b border-line py-3 max-tablet:grid-cols-[44px_minmax(0,1fr)_28px]">
       <Name sample={sample} />
       <HeatAndLot sample={sample} />
       <span className="max-tablet:order-1 max-tablet:col-span-full"><TravellerLine nodes={sample.traveller} /></span>
-      <span className="text-right text-quiet">{sample.onHold ? <Flag>on hold</Flag> : sample.now}</span>
+      <span className="text-right text-quiet max-tablet:order-2 max-tablet:col-span-full max-tablet:text-left">{sample.onHold ? <Flag>on hold</Flag> : sample.now}</span>
       <Fold number={sample.number} onPress={onOpen} />
     </li>
   )

@@ -1,4 +1,4 @@
-import type { TravellerNode } from '../../../../shared/api/travellers.ts'
+import type { TravellerNode } from '../../../../shared/api/basics.ts'
 
 /** Where the samples of a job are, from its traveller: "now pull", "grind and polish 75 %". Empty when nothing is going on. */
 export function standingWords(traveller: readonly TravellerNode[]): string {

@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react'
 import type { Order, Quote } from '../../../../shared/api/orders.ts'
-import type { TravellerNode } from '../../../../shared/api/travellers.ts'
+import type { TravellerNode } from '../../../../shared/api/basics.ts'
 import { orderedTests } from '../../../../shared/orders/ordered-test.ts'
 import { travellerSteps } from '../../../../shared/orders/traveller-steps.ts'
 import { currencySign, formatDay, formatTime } from '../../../lib/format.ts'

@@ -5,7 +5,7 @@ import { Button } from '../buttons/button.tsx'
  * A picture with its caption and the same numbers as a table one press away. `children` draw inside an SVG of `width` by `height`
  * with the classes of picture.css: `curve` for the thing, `con` and `hair` for construction, `window`, `node`, `lab`, `ax`.
  */
-export function PictureFrame({ title, aside, description, width, height, table, children, className, ref }: {
+export function PictureFrame({ title, aside, description, width, height, table, isMoved = false, children, className, ref }: {
   title: string
   aside?: ReactNode
   /** What the picture shows, in a sentence for those who do not see it. */
@@ -14,6 +14,8 @@ export function PictureFrame({ title, aside, description, width, height, table, 
   height: number
   /** The same numbers. */
   table?: ReactNode
+  /** Whether something in it can be moved, so that it is no mere image. */
+  isMoved?: boolean
   children: ReactNode
   className?: string
   /** From `useWidth`. */
@@ -32,7 +34,7 @@ export function PictureFrame({ title, aside, description, width, height, table, 
       </figcaption>
       <div id={id}>
         {asTable ? <div className="max-h-[480px] overflow-y-auto" tabIndex={0} role="group" aria-label={title}>{table}</div> : (
-          <svg className="pic" viewBox={`0 0 ${width} ${height}`} role="img" aria-label={description}>{children}</svg>
+          <svg className="pic" viewBox={`0 0 ${width} ${height}`} role={isMoved ? 'group' : 'img'} aria-label={description}>{children}</svg>
         )}
       </div>
     </figure>

@@ -1,4 +1,4 @@
-import type { TravellerNode } from '../../../../shared/api/travellers.ts'
+import type { TravellerNode } from '../../../../shared/api/basics.ts'
 import { classNames } from '../class-names.ts'
 import { temperOf } from './temper.ts'
 import { spokenState, travellerSummary } from './traveller-summary.ts'

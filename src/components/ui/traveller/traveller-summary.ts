@@ -1,4 +1,4 @@
-import type { TravellerNode } from '../../../../shared/api/travellers.ts'
+import type { TravellerNode } from '../../../../shared/api/basics.ts'
 
 const states: Record<TravellerNode['state'], string> = { todo: 'to come', now: 'now', done: 'done', part: 'in part', held: 'on hold', void: 'void', back: 'sent back' }
 

@@ -1,4 +1,4 @@
-import type { TravellerNode } from '../../../../shared/api/travellers.ts'
+import type { TravellerNode } from '../../../../shared/api/basics.ts'
 import { formatDay, formatTime, formatWhen, isSameDay, type Manner } from '../../../lib/format.ts'
 
 /** The time under a node: "since 10:31" while it goes on, the hour when it is today, the day alone where the hour says nothing. */
