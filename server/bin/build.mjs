@@ -1,5 +1,7 @@
 // npm run build: bundles of the server's programs and of the browser's part, all below .build.
 import fs from 'node:fs'
+import path from 'node:path'
+import zlib from 'node:zlib'
 import { explain } from './launcher/failure.mjs'
 import { buildFolder, inProject, project } from './launcher/data/project.mjs'
 import { markBuilt, markUnbuilt, sourcesHash } from './launcher/sources-hash.mjs'
@@ -43,12 +45,24 @@ async function bundleClient() {
   await vite.build({ root: project, configFile: inProject('vite.config.ts'), logLevel: 'warn' })
 }
 
+/** Every text file of the browser's part also pressed with Brotli at its best, once, so that no request has to. */
+function pressClient() {
+  const folder = path.join(buildFolder, 'client')
+  for (const name of fs.readdirSync(folder, { recursive: true })) {
+    const file = path.join(folder, name)
+    if (!/\.(js|css|html|svg)$/.test(name) || fs.statSync(file).size < 1024) continue
+    const text = fs.readFileSync(file)
+    fs.writeFileSync(`${file}.br`, zlib.brotliCompressSync(text, { params: { [zlib.constants.BROTLI_PARAM_SIZE_HINT]: text.length } }))
+  }
+}
+
 try {
   process.env.NODE_ENV = 'production'
   const hash = sourcesHash() // of before the build: a change made during it is built again next time
   markUnbuilt()
   await bundlePrograms()
   await bundleClient()
+  pressClient()
   markBuilt(hash)
 } catch (error) {
   console.error(error.errors ? error.message : explain(error)) // esbuild's list of errors says it all

@@ -1,7 +1,7 @@
 import type { RequestHandler } from 'express'
 import helmet from 'helmet'
 
-const nowhere = ['accelerometer', 'autoplay', 'bluetooth', 'browsing-topics', 'display-capture', 'geolocation', 'gyroscope', 'hid', 'magnetometer', 'microphone', 'midi', 'payment', 'screen-wake-lock', 'serial', 'usb', 'xr-spatial-tracking']
+const nowhere = ['accelerometer', 'autoplay', 'browsing-topics', 'display-capture', 'geolocation', 'gyroscope', 'hid', 'magnetometer', 'microphone', 'midi', 'payment', 'screen-wake-lock', 'serial', 'usb', 'xr-spatial-tracking']
 const permissions = [...nowhere.map((feature) => `${feature}=()`), 'camera=(self)', 'fullscreen=(self)'].join(', ')
 
 /** What browsers are told about every answer: only our own scripts, styles and pictures, framed by nobody, plain http never again. */

@@ -13,7 +13,7 @@ export async function orderAndPay(page: Page): Promise<Ordered> {
   for (const title of ['Rockwell hardness', 'Tensile', 'Grain size by intercept']) await addTest(page, title)
   await expect.poll(() => page.getByRole('checkbox', { name: /, row [12]$/ }).evaluateAll((boxes) => boxes.map((box) => (box as HTMLInputElement).checked))).toEqual(Array.from({ length: 6 }, () => true))
 
-  await setLimits(page, 'Rockwell C', async () => {
+  await setLimits(page, 'Rockwell HRC', async () => {
     await page.getByLabel('Mean hardness, lowest').fill('29')
     await page.getByLabel('Mean hardness, highest').fill('34')
   })

@@ -44,11 +44,14 @@ export function cellText({ sample, unread, size }: DraftRow, cell: CellName): st
   return sample[cell]
 }
 
-/** A row with a cell typed anew. A form or size that cannot be read is kept as text, and the sample keeps what it had before. */
-export function withCell(row: DraftRow, cell: CellName, text: string): DraftRow {
+/**
+ * A row with a cell typed anew. A form or size that cannot be read is kept as text, and the sample keeps what it had before. `typing`: the
+ * cursor is still in it, so a form counts only when it is written out, or its beginning would be completed under the hands of who types on.
+ */
+export function withCell(row: DraftRow, cell: CellName, text: string, typing = false): DraftRow {
   if (cell === 'size') return row.unread.form === undefined ? withSize(row, row.sample.piece.form, text) : { ...row, size: text }
   if (cell !== 'form') return { ...row, sample: { ...row.sample, [cell]: text } }
-  const form = readForm(text)
+  const form = typing ? productForms.find((one) => one === text.trim().toLowerCase()) : readForm(text)
   const size = cellText(row, 'size')
   // a size is read by its form; without one it waits as text, so that the order never holds a size of the wrong form
   if (!form) return { ...row, sample: { ...row.sample, piece: { form: row.sample.piece.form } }, size, unread: { ...row.unread, form: text } }
@@ -63,9 +66,9 @@ function withSize(row: DraftRow, form: Piece['form'], text: string): DraftRow {
   return { ...row, sample: { ...row.sample, piece }, unread, size: text }
 }
 
-/** When the cursor leaves a size, it is written as the trade writes it. */
+/** When the cursor leaves a form it is read by how it begins, and a size is written as the trade writes it. */
 export function tidied(row: DraftRow): DraftRow {
-  if (row.unread.form !== undefined) return row
+  if (row.unread.form !== undefined) return withCell(row, 'form', row.unread.form)
   const { size: _typed, ...rest } = row
   return rest
 }

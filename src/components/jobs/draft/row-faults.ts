@@ -9,7 +9,7 @@ export function rowFaults({ rows }: Pick<DraftState, 'rows'>, faults: readonly O
   const found = new Map<string, RowFault[]>()
   rows.forEach((row) => {
     const unread = (['form', 'size'] satisfies UnreadCell[]).filter((cell) => row.unread[cell] !== undefined)
-    if (unread.length > 0) found.set(row.id, unread.map((cell) => ({ cell, column: null, message: unreadWords(row, cell), cures: [], wait: false })))
+    if (unread.length > 0) found.set(row.id, unread.map((cell) => ({ cell, column: null, message: unreadWords(row, cell), cures: [], wait: cell === 'form' })))
   })
   for (const fault of faults) {
     const row: DraftRow | undefined = fault.row === null ? undefined : rows[fault.row]

@@ -18,8 +18,8 @@ export function useRowDeeds({ state, change }: Pick<OrderDraft, 'state' | 'chang
   const rows = useMemo((): RowDeeds => {
     const edit = (id: string, next: (row: DraftRow) => DraftRow, mark: string | null = null) => change((now) => withRows(withFresh(now, id), new Set([id]), next), mark)
     return {
-      type: (id, cell, text) => edit(id, (row) => withCell(row, cell, text), `${id}.${cell}`),
-      left: (id, cell) => cell === 'size' && change((now) => (now.rows.some((row) => row.id === id && row.size !== undefined) ? withRows(now, new Set([id]), tidied) : now), `${id}.${cell}`),
+      type: (id, cell, text) => edit(id, (row) => withCell(row, cell, text, true), `${id}.${cell}`),
+      left: (id, cell) => (cell === 'size' || cell === 'form') && change((now) => (now.rows.some((row) => row.id === id && (row.size !== undefined || row.unread.form !== undefined)) ? withRows(now, new Set([id]), tidied) : now), `${id}.${cell}`),
       tick: (id, key, ticked) => change((now) => withTick(withFresh(now, id), key, new Set([id]), ticked)),
       override: (id, key, parameters) => edit(id, (row) => ({ ...row, sample: { ...row.sample, overrides: withOverride(row.sample.overrides, key, parameters) } })),
       correct: (id, cell) => document.getElementById(`cell-${id}-${cell}`)?.focus(),

@@ -40,6 +40,8 @@ export function SampleGrid({ draft, faults, rowMinor, netMinor, currency }: { dr
   }
   const chosen = (place: number) => (keys.together && place >= keys.together.from && place <= keys.together.to ? keys.together.column : null)
   const row = { columns, currency, deeds: deeds.rows }
+  // one list, so that the fresh row keeps its place in the page, and the cursor in it, when it becomes a sample
+  const withFresh = rows.some(({ id }) => id === deeds.fresh.id) ? rows : [...rows, deeds.fresh]
   return (
     <>
       {paste.last && <PastedNote key={paste.last.key} pasted={paste.last.pasted} tests={columns} firstRow={paste.last.firstRow} onColumns={paste.again} onUndo={state === paste.last.pasted.state ? paste.undo : undefined} onClose={paste.close} />}
@@ -69,8 +71,11 @@ export function SampleGrid({ draft, faults, rowMinor, netMinor, currency }: { dr
             </tr>
           </thead>
           <tbody>
-            {rows.map((one, place) => <GridRow key={one.id} {...row} row={one} place={place} faults={shown(one.id)} priceMinor={rowMinor[place]} chosen={chosen(place)} />)}
-            <GridRow key={deeds.fresh.id} {...row} row={deeds.fresh} place={rows.length} fresh chosen={null} />
+            {withFresh.map((one, place) => (
+              place < rows.length
+                ? <GridRow key={one.id} {...row} row={one} place={place} faults={shown(one.id)} priceMinor={rowMinor[place]} chosen={chosen(place)} />
+                : <GridRow key={one.id} {...row} row={one} place={place} fresh chosen={null} />
+            ))}
           </tbody>
           <tfoot>
             <tr>
