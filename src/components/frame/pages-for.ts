@@ -7,12 +7,12 @@ type Place = { to: string; label: string; can: readonly [Action, SubjectName] }
 const places: readonly Place[] = [
   { to: '/floor', label: 'Floor', can: ['manage', 'PlanEntry'] },
   { to: '/bench', label: 'Bench', can: ['record', 'TestRun'] },
-  { to: '/receive', label: 'Receive', can: ['receive', 'Sample'] },
+  { to: '/receive', label: 'Receive', can: ['prepare', 'Step'] },
   { to: '/review', label: 'Review', can: ['review', 'TestRun'] },
   { to: '/jobs', label: 'Jobs', can: ['read', 'Job'] },
   { to: '/samples', label: 'Samples', can: ['read', 'Sample'] },
   { to: '/reports', label: 'Reports', can: ['read', 'Report'] },
-  { to: '/invoices', label: 'Invoices', can: ['read', 'Invoice'] },
+  { to: '/invoices', label: 'Invoices', can: ['pay', 'Job'] },
   { to: '/equipment', label: 'Equipment', can: ['read', 'Equipment'] },
   { to: '/people', label: 'People', can: ['manage', 'Person'] },
 ]

@@ -47,7 +47,7 @@ export function ReceiveSample({ sample, onDone }: { sample: Sample; onDone: () =
       ]} />
       <form onSubmit={submit} className="grid gap-4">
         <div>
-          <TextField label="How it came" value={condition} maxLength={300} onChange={(event) => type({ condition: event.target.value })} autoFocus onFocus={(event) => event.target.select()} error={fields['condition']} />
+          <TextField label="How it came" value={condition} maxLength={300} onChange={(event) => type({ condition: event.target.value })} onFocus={(event) => event.target.select()} error={fields['condition']} />
           <div className="mt-2 flex flex-wrap gap-2">
             {conditions.map((words) => <Button key={words} kind="soft" size="tiny" className="min-h-control!" aria-pressed={condition === words} onClick={() => type({ condition: words })}>{words}</Button>)}
           </div>
@@ -57,7 +57,8 @@ export function ReceiveSample({ sample, onDone }: { sample: Sample; onDone: () =
         <SamplePhotos sample={sample} />
         {receive.error && <Note kind="bad" title="Not received.">{receive.error.message}</Note>}
         <div className="flex flex-wrap items-center gap-3">
-          <Button kind="main" type="submit" keys="Enter" busy={receive.isPending} refusal={refusal} refusalAt="below">{differs ? 'Receive, hold and ask' : 'Receive'}</Button>
+          {/* the cursor waits here and not in the text, where the next label's scan would be typed */}
+          <Button kind="main" type="submit" keys="Enter" autoFocus busy={receive.isPending} refusal={refusal} refusalAt="below">{differs ? 'Receive, hold and ask' : 'Receive'}</Button>
           {sample.state === 'expected' && <Button kind="soft" onClick={() => setIsMissing(true)}>Not in the parcel</Button>}
         </div>
       </form>
