@@ -1,52 +1,19 @@
 import { Op } from 'sequelize'
-import { afterAll, describe, expect, it } from 'vitest'
-import { startFakeMail } from '../../fakes/mail/create-fake-mail.ts'
-import { startFakeStripe } from '../../fakes/stripe/create-fake-stripe.ts'
-import { database } from '../../server/database/connection.ts'
+import { describe, expect, it } from 'vitest'
+import { File } from '../../server/models/jobs/file.ts'
 import { Job } from '../../server/models/jobs/job.ts'
 import { Plan } from '../../server/models/jobs/plan.ts'
 import { Report } from '../../server/models/reports/report.ts'
 import { ReportState } from '../../server/models/reports/report-state.ts'
-import { File } from '../../server/models/jobs/file.ts'
-import { freePort, startProcess, startRedis, until } from '../support/processes.ts'
-import { buildWorkingHouse, carryOut, orderAndPay, reviewAndIssue, signIn } from '../support/story.ts'
+import type { Sample } from '../../shared/api/samples.ts'
+import { ageClaims, holdRow, someoneSends, someoneWaits, startFaultHouse } from '../support/fault-house.ts'
+import { until } from '../support/processes.ts'
+import { carryOut, orderAndPay, reviewAndIssue } from '../support/story.ts'
 
-const redisPort = await freePort()
-const apiPort = await freePort()
-const mail = await startFakeMail({})
-const stripe = await startFakeStripe({ webhookUrl: `http://127.0.0.1:${apiPort}/api/payments/notices`, secretKey: process.env.STRIPE_SECRET_KEY!, webhookSecret: process.env.STRIPE_WEBHOOK_SECRET!, retryDelaysMs: [300, 1000, 3000] })
-const settings = {
-  PORT: String(apiPort), BASE_URL: `http://127.0.0.1:${apiPort}`, REDIS_URL: `redis://127.0.0.1:${redisPort}`, STRIPE_API_BASE: stripe.url, SMTP_URL: mail.smtpUrl,
-  WORKER_LOCK_MS: '2000', WORKER_SWEEP_MS: '1000', WORKER_AGAIN_SECONDS: '3',
-}
-let redis = await startRedis(redisPort)
-const api = startProcess('server/index.ts', settings)
-const address = `http://127.0.0.1:${apiPort}`
-await until('the API answers', async () => (await fetch(`${address}/healthz`)).ok)
-const house = await buildWorkingHouse()
-const [client, technician, manager] = await Promise.all([signIn(address, house.client), signIn(address, house.technician), signIn(address, house.manager)])
+const { house, mail, stripe, signIn, startWorker, killRedis, startRedis, mailsTo } = await startFaultHouse()
+const [client, technician, manager] = await Promise.all([signIn(house.client), signIn(house.technician), signIn(house.manager)])
 
-afterAll(async () => {
-  await api.stop()
-  await redis.kill()
-  await stripe.stop()
-  await mail.stop()
-})
-
-const startWorker = () => startProcess('worker/index.ts', settings)
-
-/** Holds a row so that a task stops in the middle of its work, until `release` is called. */
-async function holdRow(sql: string): Promise<() => Promise<void>> {
-  const transaction = await database.transaction()
-  await database.query(sql, { transaction })
-  return () => transaction.commit()
-}
-
-/** A worker that waits for a lock in the database: it is in the middle of a task. */
-const blocked = () => until('a worker waits for the held row', async () => {
-  const [rows] = await database.query(`select 1 from pg_stat_activity where wait_event_type = 'Lock' and datname = current_database()`)
-  return rows.length > 0
-})
+const messageIds = (address: string) => new Set(mailsTo(address).map(({ messageId }) => messageId))
 
 describe('a worker killed in the middle of', () => {
   it('planning: the next one makes the plan', { timeout: 120_000 }, async () => {
@@ -54,7 +21,7 @@ describe('a worker killed in the middle of', () => {
     await Plan.findOrCreate({ where: { siteId: house.site.id }, defaults: { siteId: house.site.id, madeAt: new Date(0), ledgerId: 0 } })
     const release = await holdRow(`select * from plans where site_id = '${house.site.id}' for update`)
     const first = startWorker()
-    await blocked()
+    await someoneWaits()
     await first.kill()
     await release()
     expect((await Job.findByPk(job.id, { raw: true }))!.state).toBe('placed')
@@ -71,26 +38,25 @@ describe('a worker killed in the middle of', () => {
 
     const release = await holdRow(`select * from report_states where report_id = '${report.id}' for update`)
     const first = startWorker()
-    await blocked()
+    await someoneWaits()
     await first.kill()
     await release()
 
     mail.failNext({ how: 'delay', times: 1, delayMs: 15_000 })
     const second = startWorker()
     await until('the report is made', async () => (await ReportState.findOne({ where: { reportId: report.id, state: 'current' }, raw: true })) !== null)
-    await until('a mail is being sent', async () => { const [rows] = await database.query(`select 1 from mails where state = 'sending'`); return rows.length > 0 })
+    await someoneSends()
     await second.kill()
-    await redis.kill()
-    redis = await startRedis(redisPort)
+    await killRedis()
+    await startRedis()
     mail.clearFaults()
-    await database.query(`update mails set claimed_at = claimed_at - interval '10 minutes' where state = 'sending'`)
+    await ageClaims()
 
     const third = startWorker()
     const state = await until('the report is mailed', async () => ReportState.findOne({ where: { reportId: report.id, mailedAt: { [Op.ne]: null } }, raw: true }), 90)
     expect(state.mailedTo).toBe(house.customer.reportEmail)
     expect(await File.count({ where: { jobId: job.id, purpose: 'report' } })).toBe(1)
-    const ids = mail.messages().filter(({ to }) => JSON.stringify(to).includes(house.customer.reportEmail)).map(({ messageId }) => messageId)
-    expect(new Set(ids).size).toBe(1)
+    expect(messageIds(house.customer.reportEmail).size).toBe(1)
     await third.stop()
   })
 
@@ -107,5 +73,29 @@ describe('a worker killed in the middle of', () => {
     await until('the refund is noted', async () => (await Job.findByPk(job.id, { raw: true }))!.money === 'refunded', 60)
     expect(stripe.control.refunds()).toHaveLength(1)
     await second.stop()
+  })
+
+  const mails: [string, string, () => Promise<unknown>][] = [
+    ['the mail of a password link', house.manager.email, () => client.post('/api/password-resets').send({ email: house.manager.email }).expect(200)],
+    ['the mail of a hold', house.client.email, async () => {
+      const job = await orderAndPay(client, house, stripe)
+      const { body } = await technician.get(`/api/samples/${job.samples[0]!.id}`)
+      const mismatch = { reason: 'the stamp is not the ordered heat', question: 'which is right?', answers: ['the stamp'] }
+      await technician.post(`/api/samples/${job.samples[0]!.id}/receive`).send({ version: (body as Sample).version, condition: 'undamaged', mismatch }).expect(200)
+    }],
+  ]
+  it.each(mails)('%s: it arrives, and a repeat is the same message', { timeout: 120_000 }, async (_what, address, happen) => {
+    const before = messageIds(address).size
+    mail.failNext({ how: 'delay', times: 1, delayMs: 15_000 })
+    const first = startWorker()
+    await happen()
+    await someoneSends()
+    await first.kill()
+    mail.clearFaults()
+    await ageClaims()
+    const second = startWorker()
+    await until('the mail has arrived', async () => messageIds(address).size === before + 1, 60)
+    await second.stop()
+    expect(messageIds(address).size).toBe(before + 1)
   })
 })

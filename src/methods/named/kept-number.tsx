@@ -27,7 +27,7 @@ export function KeptNumber({ sheet, path, label, aside, unit, step, className }:
   }
   const keys = (event: KeyboardEvent<HTMLInputElement>) => {
     if (event.key === 'Escape' && text !== '') return type({ [path]: '' })
-    if (event.key !== 'Enter' && event.key !== 'Tab') return
+    if ((event.key !== 'Enter' && event.key !== 'Tab') || event.ctrlKey || event.metaKey) return
     keepIt()
     if (event.key === 'Enter') {
       event.preventDefault()

@@ -49,6 +49,7 @@ export function KeptNumbers({ sheet, path, name = path, label, each, unit, step,
   }
   const keys = (place: number) => (event: KeyboardEvent<HTMLInputElement>) => {
     const isLast = place === numbers.length - 1
+    if (event.ctrlKey || event.metaKey) return
     if (event.key !== 'Enter' && !(event.key === 'Tab' && isLast && !event.shiftKey)) return
     if (isLast) keepAll()
     if (event.key === 'Enter') {

@@ -57,6 +57,7 @@ export function ReadingsGrid({ columns, rowName, sheet, carry = [], more }: {
     setTimeout(focusTyping)
   }
   const keys = (event: KeyboardEvent<HTMLTableSectionElement>) => {
+    if (event.ctrlKey || event.metaKey) return // Ctrl Enter records the run from here too
     const all = [...(body.current?.querySelectorAll<HTMLElement>('tr[data-row], tr[data-typing]') ?? [])]
     const here = all.findIndex((row) => row.contains(document.activeElement))
     if (event.key === 'Enter' && all[here]?.dataset['typing'] !== undefined) {

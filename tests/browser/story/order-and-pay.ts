@@ -36,7 +36,6 @@ export async function orderAndPay(page: Page): Promise<Ordered> {
   for (const place of ['01', '02']) await page.getByRole('link', { name: `Sample ${number}-${place}` }).waitFor()
   return { id: new URL(page.url()).pathname.split('/')[2]!, number, samples: [`${number}-01`, `${number}-02`] }
 }
-}
 
 /** As at a table: cell by cell with Tab, the next row from the empty one below. What is left empty there comes from the row above. */
 async function typeRows(page: Page): Promise<void> {
