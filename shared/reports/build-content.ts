@@ -44,8 +44,7 @@ function statements(hasUncertainty: boolean): string[] {
   return [
     'The results relate only to the items tested. The customer took the samples: the results apply to them as received, and material, size, heat and lot are as stated by the customer.',
     ...(hasUncertainty ? [] : ['No measurement uncertainty is stated in this report.']),
-    'All tests were done by the laboratory itself at the place named above; nothing was subcontracted. No opinions or interpretations are expressed.',
-    'This report shall not be reproduced except in full without the written approval of the laboratory.',
+    'All tests were done by the laboratory itself at the place named above; nothing was subcontracted. No opinions or interpretations are expressed. This report shall not be reproduced except in full without the written approval of the laboratory.',
   ]
 }
 

@@ -46,7 +46,7 @@ export function resultsTable(columns: readonly ResultColumn[], samples: readonly
   return {
     columns: columns.map(({ key, group, head, symbol, unit, name }) => ({ key, group, head, symbol, unit, name })), rows,
     limits: Object.fromEntries(columns.flatMap((column) => { const [limit, ...others] = limitsOf(column); return limit && others.length === 0 ? [[column.key, limit.text]] : [] })),
-    uncertainties: Object.fromEntries(uncertainties), coverage: factors.length === 0 ? '' : factors.length === 1 ? `k = ${factors[0]}` : 'coverage 95.45 %',
+    uncertainties: Object.fromEntries(uncertainties), coverage: factors.length === 0 ? '' : factors.length === 1 ? `k = ${factors[0]}` : '95.45 %',
   }
 }
 

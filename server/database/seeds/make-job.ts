@@ -9,11 +9,12 @@ import { Site } from '../../models/sites/site.ts'
 import { settleAs } from '../../services/billing/settle-payment.ts'
 import { draftJob } from '../../services/jobs/draft-job.ts'
 import { saveDraft } from '../../services/jobs/save-draft.ts'
+import { issueReport } from '../../services/reports/issue-report.ts'
 import { planSite } from '../../services/planning/plan-site.ts'
 import { receiveSample } from '../../services/samples/receive-sample.ts'
 import type { DemoJob } from './demo-jobs.ts'
 import { sites } from './demo-house.ts'
-import { people } from './demo-people.ts'
+import { demoPassword, people } from './demo-people.ts'
 import { measureSamples } from './measure-samples.ts'
 
 const nobody = { person: null, requestId: 'seed' }
@@ -40,6 +41,7 @@ export async function makeJob({ customer, site: siteKey, reach, order, hold }: D
   const reviewer = await callerAs(people.find((person) => person.role === 'manager' && (siteKey === 'O' ? person.site === 'O' : person.site === null))!.email)
   await measureSamples(samples.filter((_, at) => hold?.row !== at), { bench, reviewer: reach === 'in review' || reach === 'half measured' ? null : reviewer, stopAfter: reach === 'half measured' ? 2 : Infinity, seed })
   await planSite(site.id, {}, nobody)
+  if (reach === 'reported') await issueReport(saved.id, { version: (await Job.findByPk(saved.id, { raw: true }))!.version, password: demoPassword }, reviewer)
 }
 
 async function pay(jobId: string): Promise<void> {

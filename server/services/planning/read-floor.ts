@@ -53,11 +53,11 @@ function workingDays(from: DateTime, count: number): DateTime[] {
 function stepsBetween(benchIds: string[], from: Date, to: Date): Promise<StepRow[]> {
   return database.query<StepRow>(
     `select s.id as "stepId", coalesce(s.bench_id, e.bench_id) as "benchId", s.job_id as "jobId", j.number as "jobNumber", s.label, coalesce(s.started_at, e.starts_at) as start,
-      coalesce(s.ended_at, greatest(e.ends_at, s.started_at + interval '5 minutes'), s.started_at + interval '30 minutes') as end, s.state, m.number as "sampleNumber", m.received_at as "receivedAt", j.state as "jobState",
+      coalesce(s.ended_at, greatest(e.ends_at, s.started_at + interval '5 minutes', case when s.state = 'started' then now() end)) as end, s.state, m.number as "sampleNumber", m.received_at as "receivedAt", j.state as "jobState",
       p.name as person, coalesce(e.why, '') as why, coalesce(e.rejected, '[]') as rejected
      from steps s join samples m on m.id = s.sample_id join jobs j on j.id = s.job_id left join plan_entries e on e.step_id = s.id left join people p on p.id = coalesce(s.started_by_id, e.person_id)
      where coalesce(s.bench_id, e.bench_id) = any($1::uuid[]) and s.state in ('planned', 'started', 'done') and coalesce(s.started_at, e.starts_at) < $3
-       and coalesce(s.ended_at, e.ends_at, s.started_at + interval '30 minutes') > $2 order by 2, 6, m.number`,
+       and (s.state = 'started' or coalesce(s.ended_at, e.ends_at) > $2) order by 2, 6, m.number`,
     { bind: [benchIds, from, to], type: QueryTypes.SELECT },
   )
 }

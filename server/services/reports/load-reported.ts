@@ -21,7 +21,9 @@ import { engineInput, type KeptReading } from '../test-runs/live-readings.ts'
 export async function loadReported(job: Job, tx: Transaction): Promise<Omit<Reported, 'report' | 'earlier'>> {
   const of = { raw: true as const, transaction: tx }
   const here = { where: { jobId: job.id }, ...of }
-  const [company, site, customer] = await Promise.all([Company.findOne(of), Site.findByPk(job.siteId, of), Customer.findByPk(job.customerId, of)])
+  const company = await Company.findOne(of)
+  const site = await Site.findByPk(job.siteId, of)
+  const customer = await Customer.findByPk(job.customerId, of)
   if (!company || !site || !customer || !job.placedAt) throw new Error(`job ${job.number} lacks company, site, customer or day of placing`)
   const samples = await Sample.findAll({ ...here, order: [['position', 'ASC']] })
   const tests = await Test.findAll({ ...here, order: [['position', 'ASC']] })

@@ -1,4 +1,4 @@
-import { Op, type Transaction } from 'sequelize'
+import type { Transaction } from 'sequelize'
 import { inputOf } from '../../../shared/method/entries.ts'
 import type { Method } from '../../../shared/method/method.ts'
 import { Reading } from '../../models/runs/reading.ts'
@@ -9,10 +9,9 @@ export type KeptReading = { reading: Reading; strike: Strike | null }
 
 /** Everything kept in a run, in the order it was kept, with what was struck out. */
 export async function readingsOf(testRunId: string, tx?: Transaction): Promise<KeptReading[]> {
-  const [readings, strikes] = await Promise.all([
-    Reading.findAll({ where: { testRunId }, order: [['createdAt', 'ASC'], ['id', 'ASC']], raw: true, transaction: tx }),
-    Strike.findAll({ where: { testRunId: { [Op.eq]: testRunId } }, raw: true, transaction: tx }),
-  ])
+  // one after the other: a transaction has one connection
+  const readings = await Reading.findAll({ where: { testRunId }, order: [['createdAt', 'ASC'], ['id', 'ASC']], raw: true, transaction: tx })
+  const strikes = await Strike.findAll({ where: { testRunId }, raw: true, transaction: tx })
   const struck = new Map(strikes.map((strike) => [strike.readingId, strike]))
   return readings.map((reading) => ({ reading, strike: struck.get(reading.id) ?? null }))
 }

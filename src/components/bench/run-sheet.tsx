@@ -5,6 +5,7 @@ import type { Entry } from '../../../shared/method/entries.ts'
 import type { Method } from '../../../shared/method/method.ts'
 import { useMe } from '../../api/session.ts'
 import { useAddRecord, useRecordRun, useStopRun } from '../../api/test-runs.ts'
+import { after } from '../../lib/after.ts'
 import { formatDay } from '../../lib/format.ts'
 import { counting, sheetReadings, type SheetReading } from '../../lib/kept-readings/sheet-readings.ts'
 import { useTyped } from '../../lib/kept-readings/use-typed.ts'
@@ -71,12 +72,10 @@ export function RunSheet({ run, method, onRecorded, onStopped }: { run: TestRun;
   const stopper = stopperOf({ live, state, isHalfTyped: isHalfTyped(method, typed), isBehind: shown !== entries, needsRemark: warnings.length > 0 && remark.trim() === '' })
   const recordNow = () => {
     if (stopper || locked || record.isPending) return
-    record.mutate({ version: run.version, remark: remark.trim() }, {
-      onSuccess: () => {
-        clearTyped()
-        say({ text: `${run.sampleNumber}, ${method.label(run.parameters)}: recorded, waits for review.` })
-        onRecorded()
-      },
+    after(record.mutateAsync({ version: run.version, remark: remark.trim() }), () => {
+      clearTyped()
+      say({ text: `${run.sampleNumber}, ${method.label(run.parameters)}: recorded, waits for review.` })
+      onRecorded()
     })
   }
   useKeys({ 'ctrl enter': recordNow })
@@ -105,7 +104,7 @@ export function RunSheet({ run, method, onRecorded, onStopped }: { run: TestRun;
       {stopping && (
         <StopDialog
           busy={stop.isPending} error={stop.error?.message} onClose={() => setStopping(false)}
-          onStop={(reason) => stop.mutate({ version: run.version, reason }, { onSuccess: () => { clearTyped(); setStopping(false); say({ text: `${run.sampleNumber}: run stopped. The test is ready for another.` }); onStopped() } })}
+          onStop={(reason) => after(stop.mutateAsync({ version: run.version, reason }), () => { clearTyped(); setStopping(false); say({ text: `${run.sampleNumber}: run stopped. The test is ready for another.` }); onStopped() })}
         />
       )}
     </div>

@@ -3,6 +3,7 @@ import type { Bench, QueueItem } from '../../../shared/api/benches.ts'
 import type { Sample, StepInSample } from '../../../shared/api/samples.ts'
 import { methodOf } from '../../../shared/methods.ts'
 import { useFinishStep, useStartStep } from '../../api/samples.ts'
+import { after } from '../../lib/after.ts'
 import { formatTime } from '../../lib/format.ts'
 import { useTyped } from '../../lib/kept-readings/use-typed.ts'
 import { Button } from '../ui/buttons/button.tsx'
@@ -28,10 +29,7 @@ export function StepSheet({ item, step, sample, bench, onDone }: { item: QueueIt
   const done = () => {
     if (!isStarted || finish.isPending || pressed) return
     setPressed(true)
-    finish.mutate({ stepId: step.id, remark: (typed['remark'] ?? '').trim() }, {
-      onSuccess: () => { clear(); say({ text: `${item.sampleNumber}: ${step.label} done.` }); onDone() },
-      onSettled: () => setPressed(false),
-    })
+    after(finish.mutateAsync({ stepId: step.id, remark: (typed['remark'] ?? '').trim() }), () => { clear(); say({ text: `${item.sampleNumber}: ${step.label} done.` }); onDone() }, () => setPressed(false))
   }
   useKeys({ b: begin, d: done })
   const test = sample.tests.find(({ id }) => id === step.testId)

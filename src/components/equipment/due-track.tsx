@@ -20,14 +20,15 @@ export function DueTrack({ due, span }: { due: string; span: Span }) {
   )
 }
 
-/** The days along the top: today and the first of every third month that is not too near to it or to the end. */
+/** The days along the top: today and the first of every third month that is not too near to it or to the end. Stands in the cell of a head, whose right padding is the table's. */
 export function DueTicks({ span }: { span: Span }) {
-  const ticks = quarterStarts(span).filter((day) => Math.abs(place(day, span) - place(span.today, span)) > 9 && place(day, span) < 96)
+  const ticks = quarterStarts(span).filter((day) => Math.abs(place(day, span) - place(span.today, span)) > 14 && place(day, span) < 96)
+  const at = (day: string) => ({ left: `calc((100% - 28px) * ${place(day, span) / 100})` })
   return (
-    <span className="relative block h-4.5 font-normal text-quiet">
-      <span className="absolute -translate-x-1/2 font-medium whitespace-nowrap text-ink" style={{ left: `${place(span.today, span)}%` }}>today</span>
-      {ticks.map((day) => <span key={day} className="absolute -translate-x-1/2 whitespace-nowrap" style={{ left: `${place(day, span)}%` }}>{formatDay(day, 'short')}</span>)}
-    </span>
+    <>
+      <span className="absolute top-0.5 -translate-x-1/2 font-medium whitespace-nowrap" style={at(span.today)}>today</span>
+      {ticks.map((day) => <span key={day} className="absolute top-0.5 -translate-x-1/2 font-normal whitespace-nowrap text-quiet" style={at(day)}>{formatDay(day, 'short')}</span>)}
+    </>
   )
 }
 

@@ -1,5 +1,4 @@
 import type { EquipmentState } from '../../../shared/api/benches.ts'
-import { formatWhen } from '../../lib/format.ts'
 
 /** `bad`: nothing may be measured with it. `soon`: its calibration ends within four weeks. */
 export type Standing = { level: 'bad' | 'soon' | 'good'; words: string }
@@ -18,7 +17,7 @@ export function equipmentStanding({ outOfUse, calibratedUntil, lastVerification 
   if (!calibratedUntil) return { level: 'bad', words: 'no calibration on record' }
   const left = daysBetween(today, calibratedUntil)
   if (left < 0) return { level: 'bad', words: `calibration ${countDays(-left)} over` }
-  if (lastVerification && !lastVerification.passed) return { level: 'bad', words: `verification failed ${formatWhen(lastVerification.at, 'week')}` }
+  if (lastVerification && !lastVerification.passed) return { level: 'bad', words: 'verification failed' }
   if (left <= soonDays) return { level: 'soon', words: left === 0 ? 'calibration ends today' : `calibration ends in ${countDays(left)}` }
   return { level: 'good', words: 'in use' }
 }

@@ -8,7 +8,7 @@ import { FloorRow, type FloorSite } from './floor-row.tsx'
 /** Sites as bands, benches as rows, days as columns; a row is planned work against the hours there are. Arrow keys go from strip to strip. */
 export function FloorGrid({ floor, now }: { floor: Floor; now: Date }) {
   const scale = useMemo(() => dayScale(floor), [floor])
-  const byBench = useMemo(() => Map.groupBy(floor.strips, ({ benchId }) => benchId), [floor])
+  const stripsAt = (id: string) => floor.strips.filter(({ benchId }) => benchId === id)
   return (
     <ScrollSideways label="Floor">
       <div
@@ -20,7 +20,7 @@ export function FloorGrid({ floor, now }: { floor: Floor; now: Date }) {
         {floor.sites.map((site) => (
           <div key={site.id} role="rowgroup" aria-label={site.name} className="col-span-full grid [grid-template-columns:subgrid] pb-2.5">
             <BandHead site={site} floor={floor} scale={scale} />
-            {site.benches.map((bench) => <FloorRow key={bench.id} bench={bench} site={site} strips={byBench.get(bench.id) ?? []} days={floor.days} scale={scale} now={now} />)}
+            {site.benches.map((bench) => <FloorRow key={bench.id} bench={bench} site={site} strips={stripsAt(bench.id)} days={floor.days} scale={scale} now={now} />)}
           </div>
         ))}
       </div>

@@ -17,7 +17,7 @@ export function FloorRow({ bench, site, strips, days, scale, now }: { bench: Ben
   const zone = site.timeZone
   const today = calendarDay(now, zone)
   return (
-    <div role="row" data-row="" className="group grid [grid-template-columns:inherit]" style={{ gridColumn: '1 / -1', minHeight: 6 + lanes * laneHeight }}>
+    <div role="row" data-row="" className="group col-span-full grid [grid-template-columns:subgrid]" style={{ minHeight: 6 + lanes * laneHeight }}>
       <div role="rowheader" className="sticky left-0 z-4 border-t border-line bg-paper group-hover:bg-wash">
         <Popover
           label={`${bench.name}, ${site.name}`}

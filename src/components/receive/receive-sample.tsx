@@ -2,6 +2,7 @@ import { useState, type FormEvent } from 'react'
 import type { Sample } from '../../../shared/api/samples.ts'
 import { sizeText } from '../../../shared/orders/size-text.ts'
 import { useReceiveSample } from '../../api/samples.ts'
+import { after } from '../../lib/after.ts'
 import { Refusal } from '../../lib/refusal.ts'
 import { useTyped } from '../../lib/kept-readings/use-typed.ts'
 import { Button } from '../ui/buttons/button.tsx'
@@ -30,12 +31,10 @@ export function ReceiveSample({ sample, onDone }: { sample: Sample; onDone: () =
   const submit = (event: FormEvent) => {
     event.preventDefault()
     if (refusal || receive.isPending) return
-    receive.mutate({ version: sample.version, condition: condition.trim(), mismatch: differs ? mismatch : null }, {
-      onSuccess: () => {
-        clear()
-        say({ text: differs ? `${sample.number} received and on hold; the customer is asked.` : `${sample.number} received.` })
-        onDone()
-      },
+    after(receive.mutateAsync({ version: sample.version, condition: condition.trim(), mismatch: differs ? mismatch : null }), () => {
+      clear()
+      say({ text: differs ? `${sample.number} received and on hold; the customer is asked.` : `${sample.number} received.` })
+      onDone()
     })
   }
   return (
@@ -49,7 +48,7 @@ export function ReceiveSample({ sample, onDone }: { sample: Sample; onDone: () =
         <div>
           <TextField label="How it came" value={condition} maxLength={300} onChange={(event) => type({ condition: event.target.value })} onFocus={(event) => event.target.select()} error={fields['condition']} />
           <div className="mt-2 flex flex-wrap gap-2">
-            {conditions.map((words) => <Button key={words} kind="soft" size="tiny" className="min-h-control!" aria-pressed={condition === words} onClick={() => type({ condition: words })}>{words}</Button>)}
+            {conditions.map((words) => <Button key={words} kind="soft" size="tiny" className="min-h-control! aria-pressed:border-ink aria-pressed:bg-wash" aria-pressed={condition === words} onClick={() => type({ condition: words })}>{words}</Button>)}
           </div>
         </div>
         <RadioGroup across legend="Does it match what was ordered?" value={differs ? 'no' : 'yes'} onValue={(matches) => type({ matches })} choices={[{ value: 'yes', label: 'It matches' }, { value: 'no', label: 'It does not match' }]} />

@@ -4,6 +4,7 @@ import type { TestRun } from '../../../shared/api/test-runs.ts'
 import { sizeText } from '../../../shared/orders/size-text.ts'
 import { methodOf } from '../../../shared/methods.ts'
 import { useReviewRun } from '../../api/test-runs.ts'
+import { after } from '../../lib/after.ts'
 import { formatDay, formatTime } from '../../lib/format.ts'
 import { refusalWords } from '../../lib/refused-field.ts'
 import { useKeys } from '../ui/buttons/use-keys.ts'
@@ -41,13 +42,11 @@ export function ReviewRun({ run, onDone }: { run: TestRun; onDone: () => void })
     const next = results[(results.findIndex(({ key }) => key === explained?.key) + 1) % results.length]
     if (next) explain(next.key)
   }
-  const decide = (outcome: 'accepted' | 'sent back', said: { remark: string; readings: string[] }) => review.mutate({ version: run.version, outcome, ...said }, {
-    onSuccess: () => {
-      keepRemark(run.id, '')
-      setSendingBack(false)
-      say({ text: <><span className="mono">{run.sampleNumber}</span> {method?.label(run.parameters)}: run {outcome}.</> })
-      onDone()
-    },
+  const decide = (outcome: 'accepted' | 'sent back', said: { remark: string; readings: string[] }) => after(review.mutateAsync({ version: run.version, outcome, ...said }), () => {
+    keepRemark(run.id, '')
+    setSendingBack(false)
+    say({ text: <><span className="mono">{run.sampleNumber}</span> {method?.label(run.parameters)}: run {outcome}.</> })
+    onDone()
   })
   const accept = () => decide('accepted', { remark: '', readings: [] })
   const may = reviewRefusal(run) === ''

@@ -36,6 +36,8 @@ type NewStrike = { key: string; reason: string }
 export type ReadingQueue = ReturnType<typeof createReadingQueue>
 
 const usualPauses = [1000, 2000, 5000, 10_000, 30_000]
+/** Refusals that trying again does not change. */
+const final: readonly Refusal['code'][] = ['not-now', 'not-allowed', 'not-found', 'too-large']
 /** At most so many things in one request. */
 const mostAtOnce = 200
 
@@ -146,27 +148,25 @@ export function createReadingQueue({ store, run: first, send, refetch, onRun, no
       set({ going: 'waiting', problem: words })
       return pauses[Math.min(failures++, pauses.length - 1)] ?? 30_000
     }
-    switch (code) {
-      case 'already-changed': {
-        const before = run.version
-        try {
-          const fresh = await refetch()
-          await see(fresh)
-          onRun(fresh)
-        } catch (unreached) {
-          return again(unreached instanceof Error ? unreached.message : message)
-        }
-        return run.version > before ? 0 : again(message)
+    if (code === 'already-changed') {
+      const before = run.version
+      try {
+        const fresh = await refetch()
+        await see(fresh)
+        onRun(fresh)
+      } catch (unreached) {
+        return again(unreached instanceof Error ? unreached.message : message)
       }
-      case 'not-acceptable': {
-        const named = batch.filter((item) => fields[item.kind === 'keep' ? item.path : `strike.${item.key}`] !== undefined)
-        if (named.length === 0) break
-        set({ refused: { ...state.refused, ...Object.fromEntries(named.map((item) => [item.key, fields[item.kind === 'keep' ? item.path : `strike.${item.key}`] ?? message])) } })
+      return run.version > before ? 0 : again(message)
+    }
+    if (code === 'not-acceptable') {
+      const said = (item: Unsent) => fields[item.kind === 'keep' ? item.path : `strike.${item.key}`]
+      const named = batch.filter((item) => said(item) !== undefined)
+      if (named.length > 0) {
+        set({ refused: { ...state.refused, ...Object.fromEntries(named.map((item) => [item.key, said(item) ?? message])) } })
         return 0
       }
-      case 'not-now': case 'not-allowed': case 'not-found': case 'too-large': break
-      default: return again(message)
-    }
+    } else if (!final.includes(code)) return again(message)
     set({ going: 'stopped', problem: message })
     return null
   }

@@ -2,6 +2,7 @@ import { formFields } from '../../../shared/method/form.ts'
 import { RockwellParameters, type RockwellReading } from '../../../shared/hardness/rockwell/rockwell-input.ts'
 import type { SheetViewProps } from '../sheet-view.ts'
 import type { GridColumn } from '../set/readings-grid.tsx'
+import { counting } from '../../lib/kept-readings/sheet-readings.ts'
 import { plural, SetView } from '../set/set-view.tsx'
 import { TestPieceMap } from './test-piece-map.tsx'
 
@@ -18,7 +19,7 @@ export function RockwellView(sheet: SheetViewProps) {
   const places = readings.some(({ xMm, yMm }) => xMm !== undefined || yMm !== undefined)
   return (
     <SetView
-      sheet={sheet} columns={columns} title={`Mean of ${readings.length} ${plural('reading', readings.length)}`} ticks={readings.map(({ value }) => value)}
+      sheet={sheet} columns={columns} title={`Mean of ${readings.length} ${plural('reading', readings.length)}${readings.length > counting(sheet.readings).length ? ', one not kept yet' : ''}`} ticks={readings.map(({ value }) => value)}
       picture={places ? <TestPieceMap scale={scale} readings={readings} checks={live.checks} /> : undefined}
     />
   )

@@ -37,7 +37,7 @@ export function SizesRow({ sheet }: { sheet: SheetViewProps }) {
       ) : (
         <KeptNumbers sheet={sheet} path="readings.finalDiametersMm" label={<>d<sub>u</sub> at the neck</>} each="Diameter at the neck" unit="mm" step={0.01} count={1} numbersOf={numbers} valueOf={(all) => all} />
       )}
-      <KeptNumber sheet={sheet} path="readings.fractureFromNearerMarkMm" label="Fracture from a mark" aside="if near" unit="mm" step={0.1} />
+      <KeptNumber sheet={sheet} path="readings.fractureFromNearerMarkMm" label="Fracture to mark" aside="if near" unit="mm" step={0.1} />
     </div>
   )
 }

@@ -28,8 +28,8 @@ export function EquipmentPage() {
     <>
       <title>Equipment · Crosshead</title>
       <PageTitle
-        title={`Equipment, ${me.place}`}
-        under={equipment.data && <><span>{items.length === 1 ? '1 machine' : `${items.length} machines`}</span><span>{count('bad') === 0 ? 'all may be measured with' : `${count('bad')} may not be measured with`}</span>{count('soon') > 0 && <span>{count('soon')} due within four weeks</span>}</>}
+        title="Equipment"
+        under={equipment.data && <><span>{me.place}</span><span>{items.length === 1 ? '1 machine' : `${items.length} machines`}</span><span>{count('bad') === 0 ? 'all may be measured with' : `${count('bad')} may not be measured with`}</span>{count('soon') > 0 && <span>{count('soon')} due within four weeks</span>}</>}
         actions={<><Live at={equipment.dataUpdatedAt} broken={!live.connected && live.lastAt !== null} />{items.length > 0 && <CsvButton columns={columns} rows={items} name="equipment" />}</>}
       />
       <QueryState query={equipment} what="the equipment">

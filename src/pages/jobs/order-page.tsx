@@ -19,6 +19,7 @@ import { stopperOf } from '../../components/jobs/draft/stopper.ts'
 import { useOrderDraft } from '../../components/jobs/draft/use-order-draft.ts'
 import { usePhone } from '../../components/jobs/draft/use-phone.ts'
 import { useRested } from '../../components/jobs/draft/use-rested.ts'
+import { after } from '../../lib/after.ts'
 import { Button } from '../../components/ui/buttons/button.tsx'
 import { Dialog } from '../../components/ui/feedback/dialog.tsx'
 import { Kbd } from '../../components/ui/kbd.tsx'
@@ -102,7 +103,7 @@ function Discard({ job, samples }: { job: Job; samples: number }) {
       <Button kind="soft" onClick={() => setOpen(true)}>Discard</Button>
       <Dialog
         open={open} onOpenChange={setOpen} title={`Discard draft ${job.number}?`} confirm="Discard" danger busy={discard.isPending} error={discard.error?.message}
-        onConfirm={() => discard.mutate({ version: job.version }, { onSuccess: () => void navigate('/jobs') })}
+        onConfirm={() => after(discard.mutateAsync({ version: job.version }), () => void navigate('/jobs'))}
       >
         {samples === 0 ? 'It has no samples yet.' : `Its ${samples === 1 ? 'sample goes' : `${samples} samples go`} with it. This cannot be undone.`}
       </Dialog>

@@ -34,7 +34,7 @@ export function PeoplePage() {
   return (
     <>
       <title>People · Crosshead</title>
-      <PageTitle title="People" under={<span>Who works here and who orders here, and what each may do until when.</span>} actions={<ButtonLink to={to(invite)} kind="main" icon="plus">Invite a person</ButtonLink>} />
+      <PageTitle title="People" under={<span>Who works here and who orders here, and what each may do until when.</span>} actions={<ButtonLink to={to(invite)} kind={chosen === invite ? 'soft' : 'main'} icon="plus">Invite a person</ButtonLink>} />
       <div className={chosen ? 'grid grid-cols-[minmax(0,1fr)_328px] items-start gap-12 max-wide:grid-cols-1 max-wide:gap-8' : undefined}>
         <div className="min-w-0">
           <QueryState query={people} what="the people">

@@ -16,9 +16,9 @@ export async function openStep(page: Page, number: string, step: string): Promis
 /** Preparation: begun and done by one key each. */
 export async function prepare(page: Page, number: string, step: string): Promise<void> {
   await openStep(page, number, step)
-  await page.getByRole('button', { name: 'Start B' }).waitFor()
+  await page.getByRole('button', { name: 'Start B', disabled: false }).waitFor()
   await page.keyboard.press('b')
-  await page.getByRole('button', { name: 'Done D' }).waitFor()
+  await page.getByRole('button', { name: 'Done D', disabled: false }).waitFor()
   await page.keyboard.press('d')
   await page.getByText(`${number}: ${step} done.`).waitFor()
 }
@@ -26,7 +26,7 @@ export async function prepare(page: Page, number: string, step: string): Promise
 /** A run: begun by a key, measured by the given hands, recorded by a key. */
 export async function measure(page: Page, number: string, step: string, hands: Hands): Promise<void> {
   await openStep(page, number, step)
-  await page.getByRole('button', { name: 'Begin run B' }).waitFor()
+  await page.getByRole('button', { name: 'Begin run B', disabled: false }).waitFor()
   await page.keyboard.press('b')
   await hands(page, number)
   await page.getByRole('status').filter({ hasText: /^(kept \d\d:\d\d:\d\d|all kept)$/ }).waitFor()

@@ -19,8 +19,9 @@ export function drawReport(content: ReportContent): Promise<Buffer> {
   drawMethods(paper, content)
   drawPictures(paper, content.pictures.slice(0, firstPictures))
   drawWords(paper, content)
-  if (paper.pages === 1) paper.turn()
-  else paper.y += mm(6)
+  // a short annex goes on where the words end, a long one begins on a page of its own
+  paper.y += mm(5)
+  if (paper.pages === 1) paper.need(mm(85))
   drawSamples(paper, content)
   drawFurther(paper, content)
   drawConversions(paper, content)

@@ -132,7 +132,8 @@ export class Paper {
   paragraph(parent: Element, spans: readonly Span[], { x = page.left, within = width, leading = 11.75, after = 0, type = 'P' }: { x?: number; within?: number; leading?: number; after?: number; type?: string } = {}): void {
     const lines = this.wrap(spans, within)
     for (let from = 0; from < lines.length;) {
-      this.need(leading)
+      // the first two lines of a paragraph stay together
+      this.need(leading * Math.min(2, lines.length - from))
       const fit = Math.max(1, Math.min(lines.length - from, Math.floor((this.bottom - this.y) / leading)))
       this.tag(parent, type, () => {
         for (const line of lines.slice(from, from + fit)) {

@@ -8,8 +8,8 @@ import { written } from './results.ts'
 type Drawn = ReportContent['pictures'][number]
 type Size = { across: number; gap: number; plot: number; label: number }
 /** Two beside each other; where there are many, three. */
-const large: Size = { across: 2, gap: mm(8), plot: mm(40), label: 7.75 }
-const small: Size = { across: 3, gap: mm(6), plot: mm(33), label: 7 }
+const large: Size = { across: 2, gap: mm(8), plot: mm(36), label: 7.75 }
+const small: Size = { across: 3, gap: mm(6), plot: mm(31), label: 7 }
 const fewest = 9
 const captionHeight = mm(8.5)
 
@@ -21,12 +21,13 @@ export function drawPictures(paper: Paper, pictures: readonly Drawn[]): void {
   for (let at = 0; at < pictures.length; at += size.across) {
     paper.need(size.plot + captionHeight)
     const top = paper.y
-    for (const [side, picture] of pictures.slice(at, at + size.across).entries()) drawFigure(paper, section, picture, { left: page.left + side * (own + size.gap), top, width: own, ...size })
-    paper.y = top + size.plot + captionHeight + mm(2.5)
+    const ends = pictures.slice(at, at + size.across).map((picture, side) => drawFigure(paper, section, picture, { left: page.left + side * (own + size.gap), top, width: own, ...size }))
+    paper.y = Math.max(...ends) + mm(2.5)
   }
 }
 
-function drawFigure(paper: Paper, section: Element, { sample, picture }: Drawn, { left, top, width: own, plot: height, label }: Size & { left: number; top: number; width: number }): void {
+/** Draws one picture with its caption; gives where it ends. */
+function drawFigure(paper: Paper, section: Element, { sample, picture }: Drawn, { left, top, width: own, plot: height, label }: Size & { left: number; top: number; width: number }): number {
   const { doc } = paper
   const curve = picture.lines.filter(({ kind }) => kind === 'curve').flatMap(({ points }) => points)
   const seen = [...(curve.length > 0 ? curve : picture.lines.flatMap(({ points }) => points)), ...picture.marks.map(({ x, y }): [number, number] => [x, y])]
@@ -59,12 +60,14 @@ function drawFigure(paper: Paper, section: Element, { sample, picture }: Drawn, 
       if (kind === 'dashed') doc.undash()
     }
     doc.restore()
-    const lines = picture.lines.map(({ points }) => points.map(([px, py]): Spot => ({ x: x(px), y: y(py) })))
-    drawMarks(paper, picture.marks.map((mark) => ({ label: mark.label, x: x(mark.x), y: y(mark.y) })), lines, plot, label)
+    const drawn = picture.lines.map(({ points }) => points.map(([px, py]): Spot => ({ x: x(px), y: y(py) })))
+    drawMarks(paper, picture.marks.map((mark) => ({ label: mark.label, x: x(mark.x), y: y(mark.y) })), drawn, plot, label)
   }, { alt, bbox: [left, top, left + own, top + height] })
+  const lines = paper.wrap([{ text: caption, size: 7.75, color: quiet }], own)
   paper.tag(section, 'Caption', () => {
-    for (const [at, { spans }] of paper.wrap([{ text: caption, size: 8, color: quiet }], own).entries()) paper.put(spans, left, baseline(top + height + mm(0.5) + at * 10.5, 10.5, 8))
+    for (const [at, { spans }] of lines.entries()) paper.put(spans, left, baseline(top + height + mm(0.5) + at * 10.5, 10.5, 7.75))
   })
+  return top + height + mm(0.5) + lines.length * 10.5
 }
 
 /** Rings with their labels, each where it covers neither a line nor another label. */

@@ -40,7 +40,7 @@ function tableOf(content: ReportContent, results: Part, { isFirst, isLast }: { i
   const label = (text: string, color: string): Cell => ({ span: before, align: 'left', spans: [{ text, size: 8.25, color }] })
   const foot: Row[] = []
   if (results.some(({ key }) => limits[key])) foot.push({ cells: [label('Requirement, as ordered', ink), ...results.map(({ key }) => small(limits[key] ?? '', ink)), ...after] })
-  if (results.some(({ key }) => uncertainties[key])) foot.push({ cells: [label(`Expanded uncertainty, ${coverage}`, quiet), ...results.map(({ key }) => small(uncertainties[key] ?? '', quiet)), ...after] })
+  if (results.some(({ key }) => uncertainties[key])) foot.push({ cells: [label(`${coverage.startsWith('k') ? 'Expanded uncertainty' : 'Expanded U'}, ${coverage}`, quiet), ...results.map(({ key }) => small(uncertainties[key] ?? '', quiet)), ...after] })
   return {
     columns: [
       { align: 'left' }, ...(has.heat ? [{ align: 'left' as const, most: mm(26) }] : []), ...(has.lot ? [{ align: 'left' as const, most: mm(26) }] : []),

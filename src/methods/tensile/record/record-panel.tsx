@@ -62,7 +62,7 @@ export function RecordPanel({ sheet, opened: { file, text, manner: firstManner, 
         <SelectField label="Decimal mark" value={decimal} choices={[{ value: '.', label: 'point' }, { value: ',', label: 'comma' }]} onChange={(event) => setDecimal(event.target.value === ',' ? ',' : '.')} />
         <NumberField label="Rows of heading" value={manner.headingRows} step={1} min={0} max={200} onValue={(headingRows) => setManner({ ...manner, headingRows: Math.max(0, Math.round(headingRows ?? 0)) })} />
       </div>
-      <div className="grid grid-cols-[repeat(auto-fit,minmax(220px,1fr))] items-start gap-4">
+      <div className="grid grid-cols-[repeat(auto-fit,minmax(270px,1fr))] items-start gap-4">
         <ColumnChooser label="Extension" names={table.names} units={extensionUnits} value={columns.extension} onValue={(extension) => setColumns({ ...columns, extension })} />
         <ColumnChooser label="Force" names={table.names} units={forceUnits} value={columns.force} onValue={(force) => setColumns({ ...columns, force })} />
         <ColumnChooser label="Time" isOptional names={table.names} units={timeUnits} value={columns.time ?? { column: '', unit: 's' }} onValue={(time) => setColumns({ extension: columns.extension, force: columns.force, ...(time.column && { time }) })} />
