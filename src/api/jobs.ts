@@ -4,6 +4,7 @@ import { attachFile, removeFile } from '../../shared/api/files.ts'
 import * as api from '../../shared/api/jobs.ts'
 import type { Order } from '../../shared/api/orders.ts'
 import { call, sendFile } from '../lib/call.ts'
+import { useChange } from '../lib/use-change.ts'
 
 export type JobFilter = Omit<z.input<typeof api.listJobs.query>, 'after' | 'limit'>
 
@@ -18,17 +19,7 @@ export const labelsQuery = (jobId: string) => queryOptions({ queryKey: ['Job', '
 /** Asks price and promise for an order as it is typed; nothing is saved. */
 export const quoteQuery = (order: Order) => queryOptions({ queryKey: ['Quote', 'one', order], queryFn: ({ signal }) => call(api.quoteOrder, { body: { order }, signal }), placeholderData: (before) => before })
 
-/** A change of one job: its answer is put where the job is read from. */
-function useJobMutation<I>(mutationFn: (input: I) => Promise<api.Job>) {
-  const client = useQueryClient()
-  return useMutation({
-    mutationFn,
-    onSuccess: (job) => {
-      client.setQueryData(jobQuery(job.id).queryKey, job)
-      void client.invalidateQueries({ queryKey: ['Job', 'list'] })
-    },
-  })
-}
+const useJobMutation = <I>(send: (input: I) => Promise<api.Job>) => useChange(send, (id) => jobQuery(id).queryKey, [['Job', 'list']])
 
 export const useDraftJob = () => useJobMutation((body: { from?: string }) => call(api.draftJob, { body }))
 export const useSaveDraft = (jobId: string) => useJobMutation((body: { version: number; order: Order }) => call(api.saveDraft, { params: { jobId }, body }))

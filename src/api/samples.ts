@@ -3,6 +3,7 @@ import type * as z from 'zod'
 import { addPhoto } from '../../shared/api/files.ts'
 import * as api from '../../shared/api/samples.ts'
 import { call, sendFile } from '../lib/call.ts'
+import { useChange } from '../lib/use-change.ts'
 
 export type SampleFilter = Omit<z.input<typeof api.listSamples.query>, 'after' | 'limit'>
 
@@ -15,17 +16,8 @@ export const sampleQuery = (sampleId: string) => queryOptions({ queryKey: ['Samp
 /** What a scanned code stands for. */
 export const useFindCode = () => useMutation({ mutationFn: (code: string) => call(api.findCode, { params: { code } }) })
 
-function useSampleMutation<I>(mutationFn: (input: I) => Promise<api.Sample>) {
-  const client = useQueryClient()
-  return useMutation({
-    mutationFn,
-    onSuccess: (sample) => {
-      client.setQueryData(sampleQuery(sample.id).queryKey, sample)
-      void client.invalidateQueries({ queryKey: ['Sample', 'list'] })
-      void client.invalidateQueries({ queryKey: ['PlanEntry', 'list'] })
-    },
-  })
-}
+const useSampleMutation = <I>(send: (input: I) => Promise<api.Sample>) => useChange(send, (id) => sampleQuery(id).queryKey, [['Sample', 'list'], ['PlanEntry', 'list']])
+
 export const useReceiveSample = (sampleId: string) => useSampleMutation((body: z.input<typeof api.receiveSample.body>) => call(api.receiveSample, { params: { sampleId }, body }))
 export const useReportMissing = (sampleId: string) => useSampleMutation((body: { version: number; remark: string }) => call(api.reportMissing, { params: { sampleId }, body }))
 export const useStartStep = () => useSampleMutation(({ stepId, benchId }: { stepId: string; benchId: string }) => call(api.startStep, { params: { stepId }, body: { benchId } }))

@@ -1,23 +1,15 @@
-import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query'
+import { queryOptions, useMutation } from '@tanstack/react-query'
 import type * as z from 'zod'
 import { addRecord } from '../../shared/api/files.ts'
 import * as api from '../../shared/api/test-runs.ts'
 import { call, sendFile } from '../lib/call.ts'
+import { useChange } from '../lib/use-change.ts'
 
 export const runQuery = (testRunId: string) => queryOptions({ queryKey: ['TestRun', 'one', testRunId], queryFn: () => call(api.readRun, { params: { testRunId } }) })
 export const reviewsQuery = queryOptions({ queryKey: ['TestRun', 'list', 'reviews'], queryFn: () => call(api.listReviews, {}) })
 
-function useRunMutation<I>(mutationFn: (input: I) => Promise<api.TestRun>) {
-  const client = useQueryClient()
-  return useMutation({
-    mutationFn,
-    onSuccess: (run) => {
-      client.setQueryData(runQuery(run.id).queryKey, run)
-      void client.invalidateQueries({ queryKey: ['TestRun', 'list'] })
-      void client.invalidateQueries({ queryKey: ['PlanEntry', 'list'] })
-    },
-  })
-}
+const useRunMutation = <I>(send: (input: I) => Promise<api.TestRun>) => useChange(send, (id) => runQuery(id).queryKey, [['TestRun', 'list'], ['PlanEntry', 'list']])
+
 export const useStartRun = () => useRunMutation(({ testId, benchId }: { testId: string; benchId: string }) => call(api.startRun, { params: { testId }, body: { benchId } }))
 export const useRecordRun = (testRunId: string) => useRunMutation((body: { version: number; remark: string }) => call(api.recordRun, { params: { testRunId }, body }))
 export const useStopRun = (testRunId: string) => useRunMutation((body: { version: number; reason: string }) => call(api.stopRun, { params: { testRunId }, body }))

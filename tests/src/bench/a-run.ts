@@ -7,7 +7,7 @@ export function aRun(wanted: Partial<TestRun> = {}): TestRun {
     id, testId: id, sampleId: id, jobId: id, number: 1, state: 'open', version: 1, methodId: 'rockwell', methodVersion: 1, siteId: id, siteName: 'Tarnwick', timeZone: 'Europe/London', benchId: id, benchName: 'Hardness 1', equipment: null,
     performedById: id, performedBy: 'Edda Vane', startedAt: '2026-03-10T10:00:00.000Z', recordedAt: null, sampleNumber: 'J-26-00417-03', heat: '7K4193', lot: 'B-206', material: '42CrMo4 +QT', piece: { form: 'bar', diameterMm: 60 },
     purchaseOrder: '', customerName: 'Brackwater Forge', neededBy: null, traveller: [], parameters: { standard: 'ASTM E18', scale: 'HRC', surface: { shape: 'flat' } }, requirement: null, readings: [], evaluation: null, remark: '', reviews: [],
-    notMineToReview: '', authorisedUntil: '2027-01-01', sameSample: [], ...wanted,
+    notMineToReview: '', mayReviewUntil: null, authorisedUntil: '2027-01-01', sameSample: [], ...wanted,
   }
 }
 
