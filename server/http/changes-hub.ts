@@ -2,7 +2,6 @@ import { subject } from '@casl/ability'
 import type { Response } from 'express'
 import { Redis } from 'ioredis'
 import type { Change } from '../../shared/api/changes.ts'
-import type { SubjectName } from '../../shared/api/permission.ts'
 import type { Caller } from '../caller.ts'
 import { changesChannel } from '../integrations/changes-channel.ts'
 import { lastLedgerId, readLedgerAfter, type Told } from '../services/ledger/read-ledger.ts'
@@ -119,5 +118,5 @@ function write(res: Response, text: string): void {
 
 function mayKnow(caller: Caller, { subject: name, id }: Change, { customerId, siteId, jobState }: Told): boolean {
   const record = { id, customerId: customerId ?? undefined, siteId: siteId ?? undefined, personId: id, visibleToCustomer: true, ...(name === 'Job' && { state: jobState ?? undefined }) }
-  return caller.ability.can('read', subject(name as SubjectName, record) as never)
+  return caller.ability.can('read', subject(name, record))
 }

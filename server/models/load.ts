@@ -14,7 +14,7 @@ const rowOf = <R extends object>(table: ModelStatic<Model>): Table<R> => table a
 /** The row with this id, if the caller may read it; otherwise `not-found`, as if it were not there. Locks it inside a transaction when asked. */
 export async function loadOne<T extends ModelStatic<Model>>(
   table: T, name: SubjectName, id: string, caller: Asker, { tx, lock = false }: { tx?: Transaction; lock?: boolean } = {},
-): Promise<T extends ModelStatic<Model<infer R, infer _N>> ? R : never> {
+): Promise<T extends ModelStatic<Model<infer R, object>> ? R : never> {
   const allowed = accessibleWhere(caller.ability, 'read', name)
   const row = allowed && (await rowOf<Record<string, unknown>>(table).findOne({ where: { [Op.and]: [{ id }, allowed] } as WhereOptions, raw: true, transaction: tx, lock: lock && tx ? tx.LOCK.UPDATE : undefined }))
   if (!row) throw new Problem('not-found', `there is no such ${wordsOf(name)}`)

@@ -15,7 +15,7 @@ const app = await startTestApp()
 const named = endpoints.map((e): [string, Endpoint] => [`${e.method} ${e.path}`, e])
 /** A stream never ends by itself; `changes.test.ts` looks at it. What ends or changes the asker's own session comes with a browser of its own. */
 const plain = named.filter(([, { answers }]) => answers !== 'stream')
-const people = new Map<Role, { agent: Agent; allows(e: Endpoint): boolean }>()
+const people = new Map<Role, { agent: Agent; allows: (e: Endpoint) => boolean }>()
 
 beforeAll(async () => {
   const house = await buildHouse()

@@ -135,7 +135,7 @@ describe('a correction', () => {
     expect((await holder().get('/api/report-checks').query({ number: `${report.number}/1`, code: report.code }).expect(200)).body).toMatchObject({
       answer: 'superseded', revisions: [{ number: `${report.number}/1`, state: 'superseded' }, { number: `${report.number}/2`, state: 'current' }],
     })
-  })
+  }, 90_000)
 })
 
 describe('reports', () => {
@@ -154,7 +154,7 @@ describe('reports', () => {
     for (const search of [`${report.number}/1`, job.number.toLowerCase()]) expect((await manager.get('/api/reports').query({ search }).expect(200)).body.items).toMatchObject([{ id: report.id }])
     expect((await manager.get('/api/reports').query({ search: lab.customer.name }).expect(200)).body.items).toHaveLength(2)
     expect((await manager.get('/api/reports').query({ search: '100%' }).expect(200)).body.items).toEqual([])
-  })
+  }, 90_000)
 
   it('of others are not there', async () => {
     const lab = await buildLab()

@@ -2,11 +2,10 @@ import { beforeAll, describe, expect, it } from 'vitest'
 import { v7 } from 'uuid'
 import { Hold } from '../../server/models/jobs/hold.ts'
 import { Invoice } from '../../server/models/billing/invoice.ts'
-import { Report } from '../../server/models/reports/report.ts'
-import { ReportState } from '../../server/models/reports/report-state.ts'
 import { planSite } from '../../server/services/planning/plan-site.ts'
 import { startTestApp, type Agent } from '../support/app.ts'
 import { buildOrder, buildSampleOrder } from '../support/build/jobs.ts'
+import { buildOrderedReport } from '../support/build/reports.ts'
 import { buildLab, buildRecordedRun, type Lab } from '../support/build/runs.ts'
 
 const app = await startTestApp()
@@ -26,13 +25,12 @@ beforeAll(async () => {
   const { body: file } = await client.post(`/api/jobs/${job.id}/files`).attach('file', Buffer.from('a,b\n'), 'secret.csv').expect(200)
   const about = { jobId: job.id, customerId: job.customerId, siteId: job.siteId }
   const hold = await Hold.create({ ...about, sampleId: sample!.id, reason: 'bent', question: 'Go on?', answers: [], placedById: own.technician.id })
-  const report = await Report.create({ ...about, number: `R-${v7().slice(-8)}`, revision: 1, code: 'x', content: {} as Report['content'], signedById: own.manager.id, issuedAt: new Date() })
-  await ReportState.create({ reportId: report.get('id'), state: 'being made' })
+  const { report } = await buildOrderedReport(own)
   const invoice = (await Invoice.findOne({ where: { jobId: job.id }, raw: true }))!
   await planSite(own.site.id, {}, { person: null, requestId: 'test' })
   ids = {
-    job: job.id, jobNumber: job.number, sample: sample!.id, sampleNumber: sample!.number, code: sample!.code, run: run.id, hold: hold.get('id'), invoice: invoice.id, file: file.id, report: report.get('id'),
-    reportNumber: report.get('number'), test: test.id, step: steps[0]!.id, reading: run.readings[0]!.id,
+    job: job.id, jobNumber: job.number, sample: sample!.id, sampleNumber: sample!.number, code: sample!.code, run: run.id, hold: hold.get('id'), invoice: invoice.id, file: file.id, report: report.id,
+    reportNumber: report.number, test: test.id, step: steps[0]!.id, reading: run.readings[0]!.id,
   }
 })
 

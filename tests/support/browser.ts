@@ -11,6 +11,8 @@ export const desk: Screen = { width: 1440, height: 900 }
 export type People = {
   /** A browser of this person's own at the given address, signed in by the form. */
   signIn(email: string, screen?: Screen): Promise<Page>
+  /** Another page in the same person's browser. */
+  another(page: Page): Promise<Page>
   /** A browser that knows nobody, or what another one knew. */
   visit(screen?: Screen, known?: BrowserContextOptions['storageState']): Promise<Page>
   /** Lets the console say what this test brings about on purpose, such as a cut line. */
@@ -37,7 +39,7 @@ export async function openBrowser(address: string): Promise<People> {
 
   async function open({ width, height, theme = 'light' }: Screen, options: BrowserContextOptions = {}): Promise<Page> {
     const context = await browser.newContext({ viewport: { width, height }, colorScheme: theme, baseURL: address, locale: 'en-GB', timezoneId: 'Europe/London', acceptDownloads: true, ...options })
-    context.setDefaultTimeout(20_000)
+    context.setDefaultTimeout(60_000)
     contexts.add(context)
     context.on('close', () => contexts.delete(context))
     context.on('console', (message) => {
@@ -56,6 +58,7 @@ export async function openBrowser(address: string): Promise<People> {
       await page.waitForURL((url) => url.pathname !== '/' && url.pathname !== '/sign-in')
       return page
     },
+    another: (page) => page.context().newPage(),
     visit: (screen = desk, known) => open(screen, { storageState: known }),
     expectWords: (words) => { expected.push(words) },
   }

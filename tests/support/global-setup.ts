@@ -2,6 +2,7 @@ import pg from 'pg'
 import type { TestProject } from 'vitest/node'
 import { migrate } from '../../server/database/migrate.ts'
 import { startThrowawayServices } from '../../server/bin/launcher/throwaway-services.mjs'
+import { template, urlFor } from './template-database.ts'
 
 declare module 'vitest' {
   interface ProvidedContext {
@@ -9,8 +10,6 @@ declare module 'vitest' {
     redisUrl: string
   }
 }
-
-export const template = 'crosshead_template'
 
 /** One template database for the whole run, with every migration in it; each test file gets a copy. */
 export default async function setup(project: TestProject) {
@@ -38,13 +37,4 @@ async function makeTemplate(adminUrl: string): Promise<void> {
   } finally {
     await admin.end()
   }
-}
-
-/** The address of a database on the test server for one of its two users. */
-export function urlFor(adminUrl: string, user: 'crosshead_owner' | 'crosshead_app', name: string): string {
-  const url = new URL(adminUrl)
-  url.username = user
-  url.password = 'only-for-tests'
-  url.pathname = `/${name}`
-  return url.href
 }

@@ -8,7 +8,7 @@ import { promisify } from 'node:util'
 import pg from 'pg'
 import { afterAll, inject } from 'vitest'
 import { isBuilt } from '../../server/bin/launcher/sources-hash.mjs'
-import { template, urlFor } from './global-setup.ts'
+import { template, urlFor } from './template-database.ts'
 import { freePort, startBuilt, until, type Running } from './processes.ts'
 
 const run = promisify(execFile)
@@ -19,7 +19,7 @@ export type Product = {
   /** The page of the mail stand-in. */
   mailAddress: string
   /** The database, for counting what must be there once. */
-  query<Row extends object>(sql: string, values?: readonly unknown[]): Promise<Row[]>
+  query: <Row extends object>(sql: string, values?: readonly unknown[]) => Promise<Row[]>
 }
 
 /**
@@ -69,9 +69,7 @@ async function copyTemplate(name: string) {
   const reader = new pg.Client({ connectionString: urlFor(inject('adminUrl'), 'crosshead_app', name) })
   await reader.connect()
   return {
-    async query<Row extends object>(sql: string, values: readonly unknown[] = []): Promise<Row[]> {
-      return (await reader.query<Row>(sql, [...values])).rows
-    },
+    query: async <Row extends object>(sql: string, values: readonly unknown[] = []): Promise<Row[]> => (await reader.query<Row>(sql, [...values])).rows,
     async drop() {
       await reader.end()
       await admin.query(`drop database if exists ${name} with (force)`)

@@ -5,7 +5,7 @@ import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import pg from 'pg'
 import { afterAll, inject } from 'vitest'
-import { template, urlFor } from './global-setup.ts'
+import { template, urlFor } from './template-database.ts'
 
 /** Runs before each test file: a copy of the template database and settings of its own, before anything connects. */
 const name = `test_${randomUUID().replaceAll('-', '').slice(0, 16)}`

@@ -130,7 +130,7 @@ describe('handed work', () => {
     await queue.obliterate({ force: true })
     await database.query(`update task_deliveries set handed_at = now() - interval '2 minutes' where state = 'handed'`)
     const counts = await Promise.all([handAgain(queue, [one], 60), handAgain(queue, [one], 60)])
-    expect(counts[0]! + counts[1]!).toBe(40)
+    expect(counts[0] + counts[1]).toBe(40)
     expect(await queue.count()).toBe(40)
   })
 

@@ -2,6 +2,7 @@ import { Suspense, useDeferredValue, useMemo, useState } from 'react'
 import type { TestRun } from '../../../shared/api/test-runs.ts'
 import { checkEntry } from '../../../shared/method/check-entry.ts'
 import type { Entry } from '../../../shared/method/entries.ts'
+import { formFields } from '../../../shared/method/form.ts'
 import type { Method } from '../../../shared/method/method.ts'
 import { useMe } from '../../api/session.ts'
 import { useAddRecord, useRecordRun, useStopRun } from '../../api/test-runs.ts'
@@ -95,7 +96,7 @@ export function RunSheet({ run, method, onRecorded, onStopped }: { run: TestRun;
       )}
       <SheetFoot
         kept={locked && state.unsent.length === 0 ? undefined : <KeptSign state={state} zone={run.timeZone} onRetry={() => void queue.retry()} />} cautions={method.cautions(run.parameters)}
-        stopperId="stopper" stopper={locked ? undefined : (refusal ? sentence(refusal) : stopper)}
+        stopperId="stopper" isCalm={!refusal && live.failure === '' && !live.checks.some(({ severity }) => severity === 'error')} stopper={locked ? undefined : (refusal ? sentence(refusal) : stopper)}
       >
         {!locked && <Button kind="soft" size="big" onClick={() => setStopping(true)}>Stop run</Button>}
         {!locked && <Button kind="main" size="big" keys="Ctrl Enter" busy={record.isPending} refusal={stopper} refusalAt="hidden" onClick={recordNow}>Record run</Button>}
@@ -121,7 +122,8 @@ function liveOf(method: Method, run: TestRun, entries: readonly Entry[]): Live {
 function nameOf(method: Method, readings: readonly SheetReading[], key: string): string {
   const reading = readings.find((one) => one.key === key)
   if (!reading) return 'the reading'
-  const first: unknown = typeof reading.value === 'object' && reading.value !== null ? Object.values(reading.value)[0] : reading.value
+  const [column] = formFields(method.readings)
+  const first: unknown = method.isSet && column && typeof reading.value === 'object' && reading.value !== null ? Reflect.get(reading.value, column.name) : reading.value
   const number = method.isSet ? `reading ${Number(reading.path.split('.')[1]) + 1}` : 'the value'
   return checkEntry(method, reading.path, reading.value) === null && (typeof first === 'number' || typeof first === 'string') ? `${number}, ${first}` : number
 }

@@ -14,7 +14,7 @@ import { TextField } from '../ui/fields/text-field.tsx'
 import { Pairs } from '../ui/pairs.tsx'
 import { SheetFoot } from './sheet-foot.tsx'
 import { SheetHead } from './sheet-head.tsx'
-import { stepWords } from './step-words.ts'
+import { stepCautions, stepWords } from './step-words.ts'
 
 /** A step of preparation: what to do, started and done with one key each. */
 export function StepSheet({ item, step, sample, bench, onDone }: { item: QueueItem; step: StepInSample; sample: Sample; bench: Bench; onDone: () => void }) {
@@ -36,7 +36,7 @@ export function StepSheet({ item, step, sample, bench, onDone }: { item: QueueIt
   const error = start.error ?? finish.error
   return (
     <div className="flex min-w-0 flex-1 flex-col">
-      <SheetHead sample={sample} title={step.label} summary={test ? `for ${test.label}` : undefined} equipment={bench.equipment} zone={sample.timeZone} lines={isStarted && step.startedAt ? <p>begun {formatTime(step.startedAt, { zone: sample.timeZone })}{step.personName && ` by ${step.personName}`}</p> : undefined} />
+      <SheetHead sample={sample} title={step.label.charAt(0).toUpperCase() + step.label.slice(1)} summary={test ? `for ${test.label}` : undefined} equipment={bench.equipment} zone={sample.timeZone} lines={isStarted && step.startedAt ? <p>begun {formatTime(step.startedAt, { zone: sample.timeZone })}{step.personName && ` by ${step.personName}`}</p> : undefined} />
       <div className="grid flex-1 content-start gap-6 px-10 py-8 max-desk:px-gutter">
         {error && <Note kind="bad" title="That did not work.">{error.message}</Note>}
         <section className="max-w-180">
@@ -49,7 +49,7 @@ export function StepSheet({ item, step, sample, bench, onDone }: { item: QueueIt
         </section>
         {isStarted && <TextField className="max-w-120" label="Remark" aside="if any" value={typed['remark'] ?? ''} onChange={(event) => type({ remark: event.target.value })} maxLength={500} />}
       </div>
-      <SheetFoot cautions={test ? (methodOf(test.methodId)?.cautions(test.parameters) ?? []) : []} stopperId="cannot-start" stopper={refusal}>
+      <SheetFoot cautions={[...(stepCautions[step.kind] ?? []), ...(step.kind === 'etch' && test ? (methodOf(test.methodId)?.cautions(test.parameters) ?? []) : [])]} stopperId="cannot-start" stopper={refusal}>
         {isStarted
           ? <Button kind="main" size="big" keys="D" busy={finish.isPending} onClick={done}>Done</Button>
           : <Button kind="main" size="big" keys="B" busy={start.isPending} refusal={refusal} refusalAt="hidden" onClick={begin}>Start</Button>}

@@ -8,3 +8,11 @@ export const stepWords: Readonly<Record<StepInSample['kind'], readonly string[]>
   'grind and polish': ['Go through the papers with water, turning the piece by a quarter each time until the earlier scratches are gone.', 'Rinse, then polish to a finish without scratches at the magnification to be used.', 'Look at it unetched: pull-outs, smearing and rounded edges mean grinding again.'],
   'etch': ['Hood on, goggles and gloves on, the bottle\'s name and date checked.', 'Etch until the boundaries are seen, no longer; rinse with water, then alcohol, and dry.', 'Look at it: too dark is polished and etched again.'],
 }
+
+/** Usual cautions of preparation; the laboratory's own rules come first. Etchants have theirs from the method. */
+export const stepCautions: Readonly<Record<StepInSample['kind'], readonly string[]>> = {
+  'section': ['Guard closed, coolant on, eye protection; let the cut face cool before it is touched.'],
+  'machine': ['Chuck key out, sleeves and hair tied, eye protection; chips are sharp and hot.'],
+  'mount': ['The press is hot and under pressure: let it cool before it is opened; gloves for resins and hardeners.'],
+  'grind and polish': ['Hold the piece so that the wheel pulls it away from you; no loose sleeves or gloves at a turning wheel.'],
+}

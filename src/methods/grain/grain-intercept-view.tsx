@@ -18,8 +18,8 @@ export function GrainInterceptView(sheet: SheetViewProps) {
   const what = kept ? (kept.intercepts === undefined ? 'intersections' : 'intercepts') : typed['what'] === 'intercepts' ? 'intercepts' : 'intersections'
   const columns = formFields(method.readings).flatMap((field): GridColumn[] => {
     if (field.kind !== 'number') return []
-    if (field.name === 'lineLengthMm') return [{ field, head: 'Line on the specimen', unit: 'mm', decimals: 3 }]
-    return field.name === what ? [{ field: { ...field, optional: false }, head: what === 'intersections' ? 'Boundaries crossed' : 'Grains cut' }] : []
+    if (field.name === 'lineLengthMm') return [{ field, head: 'Line', unit: 'mm', decimals: 3 }]
+    return field.name === what ? [{ field: { ...field, optional: false }, head: what === 'intersections' ? 'Crossed' : 'Grains cut' }] : []
   }).reverse()
   const perMm = (field: Partial<Counted>) => {
     const count = field.intersections ?? field.intercepts
@@ -33,7 +33,7 @@ export function GrainInterceptView(sheet: SheetViewProps) {
     <SetView
       sheet={sheet} rowName="Field" columns={columns} carry={['lineLengthMm']}
       more={[
-        { head: 'N_L', unit: '1/mm', cell: (field) => show(perMm(field), 1) },
+        { head: <>N<sub>L</sub></>, unit: '1/mm', cell: (field) => show(perMm(field), 1) },
         { head: 'G', cell: (field) => { const count = perMm(field); return count ? formatNumber(grainSizeNumber(count, standard), 1) : '' } },
       ]}
       title={`Grain size, ${fields.length} ${plural('field', fields.length)}, ${formatNumber(total)} counts`}

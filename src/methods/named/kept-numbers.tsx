@@ -10,7 +10,7 @@ import { keepNamed } from './keep-named.ts'
  * One value that is measured several times, a box for each: diameters along a test piece. Enter goes from box to box, and keeps
  * them together from the last one or when the boxes are left by Tab.
  */
-export function KeptNumbers({ sheet, path, name = path, label, each, unit, step, count, numbersOf, valueOf, className }: {
+export function KeptNumbers({ sheet, path, name = path, label, each, unit, step, count, numbersOf, valueOf, unkept, className }: {
   sheet: SheetViewProps
   path: string
   /** Tells lists apart that are kept in one value. */
@@ -26,6 +26,8 @@ export function KeptNumbers({ sheet, path, name = path, label, each, unit, step,
   numbersOf: (kept: unknown) => readonly number[]
   /** What is kept of these numbers; undefined while it is not whole. */
   valueOf: (numbers: readonly number[], kept: unknown) => unknown
+  /** What counts while nothing is kept. */
+  unkept?: string | undefined
   className?: string
 }) {
   const { method, readings, typed, type, locked } = sheet
@@ -70,6 +72,7 @@ export function KeptNumbers({ sheet, path, name = path, label, each, unit, step,
         ))}
       </div>
       {wrong ? <FieldError>{wrong}</FieldError> : value !== undefined && <p className="mt-1.5 text-13 text-quiet">Enter keeps them</p>}
+      {unkept && !isTyped && standing.length === 0 && !locked && <p className="mt-1.5 text-13 text-amber">{unkept}</p>}
     </fieldset>
   )
 }

@@ -103,9 +103,9 @@ export function ReadingsGrid({ columns, rowName, sheet, carry = [], more }: {
     <table className="w-full border-collapse" aria-label={`${rowName}s`}>
       <thead>
         <tr className="text-13">
-          <th scope="col" className="border-b border-ink pr-3 pb-1.5 text-left font-medium">{rowName}</th>
+          <th scope="col" className="w-16 border-b border-ink pr-3 pb-1.5 text-left font-medium">{rowName}</th>
           {columns.map(({ field, head, unit }, at) => <th key={field.name} scope="col" className={classNames('border-b border-ink px-3 pb-1.5 font-medium', at === 0 ? 'text-left' : 'text-right')}>{head} {unit && <span className="unit">{unit}</span>}</th>)}
-          {more?.map(({ head, unit }, at) => <th key={at} scope="col" className="border-b border-ink px-3 pb-1.5 text-right font-medium">{head} {unit && <span className="unit">{unit}</span>}</th>)}
+          {more?.map(({ head, unit }, at) => <th key={at} scope="col" className="w-22 border-b border-ink px-3 pb-1.5 text-right font-medium">{head} {unit && <span className="unit">{unit}</span>}</th>)}
           <th scope="col" className="border-b border-ink pb-1.5"><span className="sr-only">What is to be said about it</span></th>
         </tr>
       </thead>

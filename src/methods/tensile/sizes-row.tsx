@@ -20,9 +20,9 @@ export function SizesRow({ sheet }: { sheet: SheetViewProps }) {
   const usual = now && measured ? `usual ${formatNumber(proportionalGaugeLength(now, standard))}` : undefined
   return (
     <div className="mb-4 grid grid-cols-[repeat(auto-fit,minmax(140px,1fr))] items-start gap-x-4 gap-y-3 [&>*:first-child]:col-span-2">
-      {shape === 'round' && <Several sheet={sheet} list="diametersMm" label={ordered?.shape === 'round' && !measured ? `Diameter, ordered ${ordered.diametersMm.map((one) => formatNumber(one)).join(', ')}` : 'Diameter, three places'} each="Diameter" />}
-      {shape === 'rectangular' && <Several sheet={sheet} list="thicknessesMm" label={ordered?.shape === 'rectangular' && !measured ? `Thickness, ordered ${ordered.thicknessesMm.map((one) => formatNumber(one)).join(', ')}` : 'Thickness, three places'} each="Thickness" />}
-      {shape === 'rectangular' && <Several sheet={sheet} list="widthsMm" label={ordered?.shape === 'rectangular' && !measured ? `Width, ordered ${ordered.widthsMm.map((one) => formatNumber(one)).join(', ')}` : 'Width, three places'} each="Width" />}
+      {shape === 'round' && <Several sheet={sheet} list="diametersMm" label="Diameter, three places" each="Diameter" />}
+      {shape === 'rectangular' && <Several sheet={sheet} list="thicknessesMm" label="Thickness, three places" each="Thickness" />}
+      {shape === 'rectangular' && <Several sheet={sheet} list="widthsMm" label="Width, three places" each="Width" />}
       {shape === 'area' && (
         <KeptNumbers sheet={sheet} path={section} label="Area" each="Area" unit="mm²" step={0.01} count={1} numbersOf={(kept) => areaOf(kept)} valueOf={([areaMm2]) => ({ shape: 'area', areaMm2 })} />
       )}
@@ -47,12 +47,14 @@ type List = 'diametersMm' | 'thicknessesMm' | 'widthsMm'
 /** One list of the section; thicknesses and widths are kept together, so each keeps what the other had, measured or ordered. */
 function Several({ sheet, list, label, each }: { sheet: SheetViewProps; list: List; label: string; each: string }) {
   const before = Section.safeParse(sheet.run.parameters['section']).data
+  const nominal = listOf(before, list)
   const half = Section.safeParse(parsed(sheet.typed[section])).data
   const rest = (kept: unknown) => ({ ...before, ...Section.safeParse(kept).data, ...half })
   return (
     <KeptNumbers
       sheet={sheet} path={section} name={list} label={label} each={each} unit="mm" step={0.001} count={3}
       numbersOf={(kept) => listOf(Section.safeParse(kept).data, list)} valueOf={(all, kept) => ({ ...rest(kept), [list]: all })}
+      unkept={nominal.length > 0 ? `not measured yet: the ordered ${nominal.map((one) => formatNumber(one)).join(', ')} mm counts` : undefined}
     />
   )
 }

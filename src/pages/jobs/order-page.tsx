@@ -61,7 +61,7 @@ function Order({ job }: { job: Job }) {
     <>
       <PageTitle
         crumb={{ to: '/jobs', label: 'Jobs' }} title={<>New job <span className="mono text-quiet">{job.number}</span></>}
-        actions={<><SavingWords saving={draft.saving} zone={zone} />{!locked && <Discard job={job} samples={order.samples.length} />}</>}
+        actions={!locked && <><SavingWords saving={draft.saving} zone={zone} /><Discard job={job} samples={order.samples.length} /></>}
       />
       {locked && <WaitsNote job={job} place={place} left={params.get('payment') === 'left'} />}
       <ConflictNote draft={draft} job={job} />

@@ -6,9 +6,7 @@ import type { Hands } from './work-through.ts'
 /** Readings typed by keyboard, one mistyped and struck out, and the page reloaded in the middle. */
 export const rockwellWithMistake: Hands = async (page) => {
   await typeReadings(page, ['31.2', '31.6'])
-  await typeByHand(page, '13.4')
-  await page.keyboard.press('Enter')
-  await row(page, '13.4').waitFor()
+  await typeReading(page, '13.4')
   await page.keyboard.press('ArrowUp')
   await page.keyboard.press('s')
   const dialog = page.getByRole('dialog')
@@ -74,13 +72,16 @@ async function typeByHand(page: Page, text: string): Promise<void> {
   await page.waitForTimeout(60)
 }
 
-async function typeReadings(page: Page, readings: readonly string[]): Promise<void> {
+/** One reading into the row that is being typed, kept by Enter. */
+export async function typeReading(page: Page, reading: string): Promise<void> {
   await typing(page).waitFor()
-  for (const reading of readings) {
-    await typeByHand(page, reading)
-    await page.keyboard.press('Enter')
-    await row(page, reading).waitFor()
-  }
+  await typeByHand(page, reading)
+  await page.keyboard.press('Enter')
+  await row(page, reading).waitFor()
+}
+
+async function typeReadings(page: Page, readings: readonly string[]): Promise<void> {
+  for (const reading of readings) await typeReading(page, reading)
 }
 
 async function typeNamed(page: Page, label: string, value: string): Promise<void> {

@@ -17,5 +17,5 @@ export async function receive(page: Page, [first, second]: readonly [string, str
   await form.getByRole('button', { name: 'surface rust' }).click()
   await form.getByRole('button', { name: /^Receive/ }).click()
   await page.getByText(`${second} received.`).waitFor()
-  await page.getByText('Everything of this job is received').waitFor()
+  await page.getByText('2 of 2 received').waitFor()
 }

@@ -3,7 +3,7 @@ import { createRequire } from 'node:module'
 import type PDFDocument from 'pdfkit'
 import { sfntOf } from './sfnt-of.ts'
 
-type Doc = typeof PDFDocument.prototype
+type Doc = InstanceType<typeof PDFDocument>
 export type Face = 'regular' | 'medium' | 'bold' | 'mono' | 'mono medium'
 
 const require = createRequire(import.meta.url)

@@ -73,7 +73,7 @@ function drawNode({ doc }: Paper, kind: 'end' | 'prep' | 'test' | 'review' | 're
 
 type Fact = [string, Span[]]
 
-function drawFacts(paper: Paper, section: Element, { customer, purchaseOrder, jobNumber, samples, site, supersedes: _ }: ReportContent): void {
+function drawFacts(paper: Paper, section: Element, { customer, purchaseOrder, jobNumber, samples, site }: ReportContent): void {
   const left: Fact[] = [
     ['Customer', [{ text: `${customer.name}\n${customer.address}` }]],
     ['Order no.', [{ text: purchaseOrder || 'none given' }]],

@@ -4,11 +4,12 @@ import { symbolParts } from '../../../../shared/reports/words/symbol-parts.ts'
 import { Fonts, type Face } from './fonts.ts'
 import { hairline, ink, mm, page, width } from './ink.ts'
 
-type Doc = typeof PDFDocument.prototype
+type Doc = InstanceType<typeof PDFDocument>
 export type Element = ReturnType<Doc['struct']>
 export type Span = { text: string; face?: Face; size?: number; color?: string; drop?: number }
 export type Line = { spans: Span[]; width: number }
-type Tagged = Parameters<Doc['struct']>[1]
+/** What pdfkit takes besides what its types know: whose cells a head is for, and where a figure stands. */
+type Tagged = NonNullable<Parameters<Doc['struct']>[1]> & { scope?: 'Column'; bbox?: [number, number, number, number] }
 
 /** Where the first page ends for text: its foot holds code and signature. */
 const firstBottom = page.bottom - mm(23.5)
@@ -183,6 +184,6 @@ export function baseline(y: number, leading: number, size = usualSize): number {
 }
 
 /** A symbol with its index below the line. */
-export function symbolSpans(symbol: string, { face = 'medium' as Face, size = 8.5, color = ink } = {}): Span[] {
+export function symbolSpans(symbol: string, { face = 'medium', size = 8.5, color = ink }: Omit<Span, 'text' | 'drop'> = {}): Span[] {
   return symbolParts(symbol).map(({ text, below }) => (below ? { text, face, size: size * 0.76, color, drop: size * 0.17 } : { text, face, size, color }))
 }

@@ -1,6 +1,6 @@
 import type { OrderColumn } from '../../../../shared/api/orders.ts'
 import { orderedTest } from '../../../../shared/orders/ordered-test.ts'
-import { cellNames, emptyRow, rowAfter, unreadWords, withCell, type CellName, type DraftRow, type DraftState } from './draft-state.ts'
+import { cellNames, emptyRow, rowAfter, tidied, unreadWords, withCell, type CellName, type DraftRow, type DraftState } from './draft-state.ts'
 
 /** What a pasted column holds: a cell of the grid, a part of the size, or a test by its key; null is left out. */
 export type PastedColumn = CellName | 'diameter' | 'thickness' | 'width' | `test:${string}` | null
@@ -55,7 +55,7 @@ export function pasteTable(state: DraftState, table: readonly (readonly string[]
     const place = start + index
     const fresh = headings || chosen ? emptyRow(state.columns) : at.cell === 0 || rows.length === 0 ? emptyRow(state.columns) : rowAfter(rows.at(-1))
     const row = fillRow(rows[place] ?? fresh, cells, columns, (message) => bad.push({ row: place + 1, message }))
-    rows[place] = row
+    rows[place] = tidied(row)
   })
   if (taken.length < body.length) bad.push({ row: mostRows, message: `an order holds ${mostRows} samples; ${body.length - taken.length} rows were left out` })
   return { state: { ...state, rows }, count: taken.length, columns, headings: headings ? filled[0] ?? null : null, bad }
