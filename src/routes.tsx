@@ -4,10 +4,14 @@ import { FirstPage } from './components/frame/first-page.tsx'
 import { NoSuchPage, PageFailed } from './components/frame/page-failed.tsx'
 import { SignedInFrame } from './components/frame/signed-in-frame.tsx'
 
+/** Before the first page's code is there. */
+const NothingYet = () => null
+
 /** Every page, each with code of its own that is fetched when it is opened. */
 export const routes: RouteObject[] = [
   {
     Component: AroundAll,
+    HydrateFallback: NothingYet,
     errorElement: <PageFailed />,
     // nothing is drawn before the first page's own code is there
     hydrateFallbackElement: <></>,

@@ -12,6 +12,7 @@ export function toProblem(error: unknown): Problem {
   if (error instanceof ZodError) return new Problem('not-acceptable', 'some values are not acceptable', Object.fromEntries(error.issues.map((issue) => [issue.path.join('.') || 'body', issue.message])))
   if (error instanceof MulterError) return new Problem(error.code === 'LIMIT_FILE_SIZE' ? 'too-large' : 'not-acceptable', error.code === 'LIMIT_FILE_SIZE' ? 'the file is larger than 25 MB' : 'send one file, in the field "file"')
   if (error instanceof UniqueConstraintError) return new Problem('already-changed', 'someone else did this at the same moment; look again')
+  if (isUnreadableText(error)) return new Problem('not-acceptable', 'some text holds a character that cannot be kept, such as a null character')
   if (isDatabaseAway(error)) return new Problem('unavailable', 'the database cannot be reached; nothing was changed, try again in a moment')
   if (error instanceof URIError) return new Problem('not-found', 'there is no such address')
   if (isBodyError(error)) return error.status === 413 ? new Problem('too-large', 'this is more than can be sent at once') : new Problem('not-acceptable', 'the request is not readable JSON')
@@ -20,6 +21,9 @@ export function toProblem(error: unknown): Problem {
 
 /** Of PostgreSQL: starting, stopping or ended by its operator; of the network: nobody there or gone. */
 const away = new Set(['57P01', '57P02', '57P03', '08000', '08003', '08006', '53300', 'ECONNREFUSED', 'ECONNRESET', 'EPIPE', 'ENOTFOUND', 'ETIMEDOUT'])
+
+/** PostgreSQL keeps neither null characters nor half a pair of UTF-16. */
+const isUnreadableText = (error: unknown) => error instanceof DatabaseError && ['22021', '22P05'].includes((error.original as { code?: string }).code ?? '')
 
 function isDatabaseAway(error: unknown): boolean {
   if (error instanceof ConnectionError) return true

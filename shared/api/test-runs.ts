@@ -32,7 +32,7 @@ export const TestRun = z.object({
   mayReviewUntil: Day.nullable(),
   /** The last day of the right to carry it out, of the person who ran it. */
   authorisedUntil: Day.nullable(),
-  /** Accepted results of the same sample by other tests, to hold this one against. */
+  /** What other tests of the same sample gave, recorded or accepted, to hold this one against. */
   sameSample: z.array(z.object({ label: z.string(), symbol: z.string(), reported: z.string(), value: z.number(), key: z.string() })),
 })
 export type TestRun = z.infer<typeof TestRun>

@@ -146,7 +146,7 @@ describe('a step of preparation', () => {
     const { steps: [cut, measure], samples: [sample] } = await buildWork(lab)
     expect((await begin(agent, cut!.id, lab.cutting.id).expect(409)).body.detail).toBe(`sample ${sample!.number} is not received yet`)
     await receive(agent, sample!.id).expect(200)
-    expect((await begin(agent, cut!.id, lab.hardness.id).expect(422)).body.fields).toEqual({ benchId: 'cannot do this step' })
+    expect((await begin(agent, cut!.id, lab.hardness.id).expect(422)).body.fields).toEqual({ benchId: expect.stringMatching(/^does not do /) })
     await begin(agent, cut!.id, (await buildLab()).cutting.id).expect(404)
     expect((await begin(agent, measure!.id, lab.hardness.id).expect(409)).body.detail).toBe('a measurement begins on its sheet')
     expect((await end(agent, measure!.id).expect(409)).body.detail).toBe('a measurement ends by recording its run')

@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto'
 import { methodOf } from '../../../shared/methods.ts'
+import { benchRefuses } from '../../../shared/planning/bench-refuses.ts'
 import type { Caller } from '../../caller.ts'
 import type { Sample } from '../../models/jobs/sample.ts'
 import { Step } from '../../models/jobs/step.ts'
@@ -39,7 +40,7 @@ export async function measureSamples(samples: readonly Sample[], { bench: techni
 
 async function benchFor(step: Step): Promise<Bench> {
   const benches = await Bench.findAll({ where: { siteId: step.siteId }, order: [['code', 'ASC']], raw: true })
-  const fits = benches.find(({ does }) => does.some(({ kind, limits }) => kind === step.capability && Object.entries(step.need.needs).every(([name, value]) => limits[name] && value >= limits[name][0] && value <= limits[name][1])))
+  const fits = benches.find(({ does }) => benchRefuses(does, step.need) === null)
   if (!fits) throw new Error(`no bench at the site takes ${step.label}`)
   return fits
 }

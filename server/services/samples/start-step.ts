@@ -1,5 +1,6 @@
 import { Op } from 'sequelize'
 import type { Sample as SampleView } from '../../../shared/api/samples.ts'
+import { benchRefuses } from '../../../shared/planning/bench-refuses.ts'
 import { Problem } from '../../../shared/problems.ts'
 import type { Caller } from '../../caller.ts'
 import { inTransaction, type Tx } from '../../database/transaction.ts'
@@ -20,7 +21,8 @@ export async function startStep(stepId: string, benchId: string, caller: Caller)
     if (step.state === 'started' && step.startedById === caller.person.id) return step.sampleId
     if (step.state !== 'to come' && step.state !== 'planned') throw new Problem('not-now', `${step.label} is ${step.state} already`)
     const bench = await loadOne(Bench, 'Bench', benchId, caller, { tx })
-    if (bench.siteId !== step.siteId || !bench.does.some(({ kind }) => kind === step.capability)) throw new Problem('not-acceptable', `${bench.name} does not do this step`, { benchId: 'cannot do this step' })
+    const refused = bench.siteId === step.siteId ? benchRefuses(bench.does, step.need) : 'is at another site'
+    if (refused) throw new Problem('not-acceptable', `${bench.name} ${refused}`, { benchId: refused })
     if (bench.out) throw new Problem('not-now', `${bench.name} is out of use`)
     const sample = await readySample(step, tx)
     const now = new Date()

@@ -10,21 +10,18 @@ import { Job } from '../../models/jobs/job.ts'
 import { Sample } from '../../models/jobs/sample.ts'
 import { Step } from '../../models/jobs/step.ts'
 import { Test } from '../../models/jobs/test.ts'
-import { loadOne, must, mustBeCurrent } from '../../models/load.ts'
+import { loadOne } from '../../models/load.ts'
 import { Result } from '../../models/runs/result.ts'
 import { TestRun } from '../../models/runs/test-run.ts'
 import { touchesOf } from '../samples/touches-of.ts'
 import { engineInput, readingsOf } from './live-readings.ts'
+import { loadOwnRun } from './load-own-run.ts'
 import { runView } from './run-view.ts'
 
 /** Hands a run over for review: the server works out the results from the readings it holds and keeps them with the run. */
 export async function recordRun(testRunId: string, { version, remark }: { version: number; remark: string }, caller: Caller): Promise<TestRunView> {
   await inTransaction(caller, async (tx) => {
-    const run = await loadOne(TestRun, 'TestRun', testRunId, caller, { tx, lock: true })
-    must(caller, 'record', 'TestRun', run)
-    if (run.performedById !== caller.person.id) throw new Problem('not-allowed', 'someone else carries out this run')
-    if (run.state !== 'open') throw new Problem('not-now', `this run is ${run.state} already`)
-    mustBeCurrent(run, version, 'This run')
+    const run = await loadOwnRun(testRunId, version, caller, tx)
     const test = (await Test.findByPk(run.testId, { raw: true, transaction: tx, lock: tx.LOCK.UPDATE }))!
     const evaluation = evaluated(run, test, engineInput(methodOf(run.methodId)!, test, await readingsOf(run.id, tx)))
     mustBeReviewable(evaluation, remark)

@@ -1,6 +1,7 @@
 import { Op } from 'sequelize'
 import type { TestRun as TestRunView } from '../../../shared/api/test-runs.ts'
 import { methodOf } from '../../../shared/methods.ts'
+import { benchRefuses } from '../../../shared/planning/bench-refuses.ts'
 import { Problem } from '../../../shared/problems.ts'
 import type { Caller } from '../../caller.ts'
 import { inTransaction, type Tx } from '../../database/transaction.ts'
@@ -36,6 +37,8 @@ export async function startRun(testId: string, benchId: string, caller: Caller):
     if (sample.onHold) throw new Problem('not-now', `sample ${sample.number} is on hold`)
     if (sample.state === 'expected' || sample.state === 'missing' || sample.state === 'void') throw new Problem('not-now', `sample ${sample.number} is ${sample.state === 'expected' ? 'not received yet' : sample.state}`)
     const step = await nextMeasure(test, tx)
+    const refused = benchRefuses(bench.does, step.need)
+    if (refused) throw new Problem('not-acceptable', `${bench.name} ${refused}`, { benchId: refused })
 
     const number = (await TestRun.count({ where: { testId }, transaction: tx })) + 1
     const now = new Date()
@@ -54,7 +57,7 @@ export async function startRun(testId: string, benchId: string, caller: Caller):
 }
 
 async function mustBeUsable(bench: Bench, test: Test, site: Site, tx: Tx): Promise<void> {
-  if (bench.siteId !== test.siteId || !bench.does.some(({ kind }) => kind === test.methodId)) throw new Problem('not-acceptable', `${bench.name} does not do this test`, { benchId: 'cannot do this test' })
+  if (bench.siteId !== test.siteId) throw new Problem('not-acceptable', `${bench.name} is at another site`, { benchId: 'is at another site' })
   if (bench.out) throw new Problem('not-now', `${bench.name} is out of use`)
   if (!bench.equipmentId) return
   const machine = (await Equipment.findByPk(bench.equipmentId, { raw: true, transaction: tx }))!

@@ -1,22 +1,18 @@
 import type { TestRun as TestRunView } from '../../../shared/api/test-runs.ts'
-import { Problem } from '../../../shared/problems.ts'
 import type { Caller } from '../../caller.ts'
 import { inTransaction } from '../../database/transaction.ts'
 import { Step } from '../../models/jobs/step.ts'
 import { Test } from '../../models/jobs/test.ts'
-import { loadOne, must, mustBeCurrent } from '../../models/load.ts'
+import { loadOne } from '../../models/load.ts'
 import { TestRun } from '../../models/runs/test-run.ts'
 import { touchesOf } from '../samples/touches-of.ts'
+import { loadOwnRun } from './load-own-run.ts'
 import { runView } from './run-view.ts'
 
 /** Gives an open run up with a reason; it stays on record and the test is ready for another. */
 export async function stopRun(testRunId: string, { version, reason }: { version: number; reason: string }, caller: Caller): Promise<TestRunView> {
   await inTransaction(caller, async (tx) => {
-    const run = await loadOne(TestRun, 'TestRun', testRunId, caller, { tx, lock: true })
-    must(caller, 'record', 'TestRun', run)
-    if (run.performedById !== caller.person.id) throw new Problem('not-allowed', 'someone else carries out this run')
-    if (run.state !== 'open') throw new Problem('not-now', `this run is ${run.state} already`)
-    mustBeCurrent(run, version, 'This run')
+    const run = await loadOwnRun(testRunId, version, caller, tx)
     const test = (await Test.findByPk(run.testId, { raw: true, transaction: tx, lock: tx.LOCK.UPDATE }))!
     await TestRun.update({ state: 'stopped', remark: reason, version: run.version + 1 }, { where: { id: run.id }, transaction: tx })
     await Test.update({ state: 'ready', version: test.version + 1 }, { where: { id: test.id }, transaction: tx })

@@ -20,7 +20,7 @@ export function KeptSign({ state: { unsent, going, keptAt, clashes, refused, pro
 }
 
 function Sign({ icon, look, children }: { icon: 'check' | 'clock' | 'warning' | 'stop'; look: string; children: ReactNode }) {
-  return <span role="status" className={`flex max-w-85 flex-none items-center gap-2 ${look}`}><Icon name={icon} /><span>{children}</span></span>
+  return <span role="status" className={`flex max-w-85 items-center gap-2 max-desk:max-w-40 ${look}`}><Icon name={icon} /><span>{children}</span></span>
 }
 
 function sentence(text: string): string {

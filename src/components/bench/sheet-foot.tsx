@@ -17,8 +17,8 @@ export function SheetFoot({ kept, cautions = [], stopper, stopperId, isCalm = fa
           <ul className="on-sheet absolute bottom-full left-0 mb-3 grid w-[min(460px,80vw)] gap-2 rounded border border-ink bg-sheet p-4 shadow-float">{cautions.map((caution) => <li key={caution}>{caution}</li>)}</ul>
         </details>
       )}
-      <div className="flex flex-none items-center justify-end gap-3">
-        {stopper && <span id={stopperId} role="status" className={`max-w-70 text-right font-medium ${isCalm ? 'text-quiet' : 'text-red'}`}>{stopper}</span>}
+      <div className="flex min-w-0 flex-1 items-center justify-end gap-3 [&>:not([role=status])]:flex-none">
+        {stopper && <span id={stopperId} role="status" className={`max-w-70 min-w-0 text-right font-medium ${isCalm ? 'text-quiet' : 'text-red'}`}>{stopper}</span>}
         {children}
       </div>
     </footer>

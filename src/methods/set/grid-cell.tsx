@@ -22,6 +22,7 @@ export function GridCell({ field, label, text, onText, isMain, isCarried, readOn
       <input
         type="text" inputMode="decimal" autoComplete="off" name={field.name} aria-label={label} data-keys="letters" value={text} readOnly={readOnly} autoFocus={autoFocus}
         aria-invalid={isUnreadable || describedBy !== undefined || undefined} aria-describedby={describedBy}
+        onFocus={(event) => isCarried && event.target.select()}
         onChange={(event) => onText(event.target.value.replace(/[^\d.,\-−+\s]/g, ''))}
         className={classNames('h-12.5 w-full rounded bg-paper px-3 focus:outline-3 focus:-outline-offset-2 focus:outline-ink', isMain ? 'font-mono text-26 font-medium tracking-tight' : 'text-right', isCarried && 'text-quiet', isUnreadable && 'text-red')}
       />

@@ -36,7 +36,7 @@ export function ReadingsGrid({ columns, rowName, sheet, carry = [], more }: {
   const before = readings.findLast(({ struck, path: other }) => !struck && other.startsWith('readings.'))
   const carried = Object.fromEntries(carry.flatMap((name) => {
     const value = valueOf(before?.value)[name]
-    return typed[cellName(name)] === undefined && typeof value === 'number' ? [[name, value]] : []
+    return (typed[cellName(name)] ?? '') === '' && typeof value === 'number' ? [[name, value]] : []
   }))
   const value = { ...carried, ...typedRow(method, typed) }
   const began = columns.some(({ field }) => (typed[cellName(field.name)] ?? '') !== '')
@@ -85,7 +85,7 @@ export function ReadingsGrid({ columns, rowName, sheet, carry = [], more }: {
       <th scope="row" className="h-12.5 w-16 border-b border-line pr-3 text-left font-normal text-quiet">{gap && !(began && problem === null) ? '' : at + 1}</th>
       {columns.map(({ field }, place) => (
         <GridCell
-          key={field.name} field={field} isMain={place === 0} label={`${rowName} ${at + 1}, ${field.label.toLowerCase()}`} text={typed[cellName(field.name)] ?? (carried[field.name] === undefined ? '' : String(carried[field.name]))}
+          key={field.name} field={field} isMain={place === 0} label={`${rowName} ${at + 1}, ${field.label.toLowerCase()}`} text={typed[cellName(field.name)] || (carried[field.name] === undefined ? '' : String(carried[field.name]))}
           isCarried={carried[field.name] !== undefined} onText={(text) => type({ [cellName(field.name)]: text })} readOnly={Boolean(locked)} describedBy={problem ? problemId : undefined} autoFocus={place === 0}
         />
       ))}

@@ -67,7 +67,7 @@ export function FloorPage() {
 function daysWords(days: Floor['days']): string {
   const [first, last] = [days[0]?.day, days.at(-1)?.day]
   if (!first || !last) return ''
-  return first === last ? formatDay(first, 'long') : `${formatDay(first, 'long')} to ${formatDay(last, 'long')}`
+  return first === last ? formatDay(first, 'long') : `${formatDay(first)} to ${formatDay(last)}`
 }
 
 function madeWords(at: string, zone: string, now: Date): string {

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
 import { productForms, type Piece } from '../../../shared/method/piece.ts'
+import { sizeFault } from '../../../shared/orders/size-fault.ts'
 import { sizeText } from '../../../shared/orders/size-text.ts'
 import { readSize } from '../../../src/components/jobs/draft/read-size.ts'
 
@@ -22,8 +23,8 @@ describe('a size as the trade writes it', () => {
     const sizes = [{ diameterMm: 60 }, { thicknessMm: 0.8 }, { thicknessMm: 45, widthMm: 90 }, { diameterMm: 60, thicknessMm: 5 }]
     for (const form of productForms) {
       for (const size of sizes) {
-        const { piece } = readSize(form, sizeText({ form, ...size }))
-        if (piece) expect(sizeText(piece)).toBe(sizeText({ form, ...size }))
+        if (sizeFault({ form, ...size }) || (form === 'wire' && 'thicknessMm' in size)) continue
+        expect(readSize(form, sizeText({ form, ...size }))).toEqual({ piece: { form, ...size } })
       }
     }
   })

@@ -61,7 +61,9 @@ export function pasteTable(state: DraftState, table: readonly (readonly string[]
   return { state: { ...state, rows }, count: taken.length, columns, headings: headings ? filled[0] ?? null : null, bad }
 }
 
-function fillRow(row: DraftRow, cells: readonly string[], columns: readonly PastedColumn[], complain: (message: string) => void): DraftRow {
+/** A row with the cells that were pasted; those beyond the end of a short line stay as they were. */
+function fillRow(row: DraftRow, cells: readonly string[], all: readonly PastedColumn[], complain: (message: string) => void): DraftRow {
+  const columns = all.slice(0, cells.length)
   const text = (column: PastedColumn) => (columns.includes(column) ? (cells[columns.indexOf(column)] ?? '').trim() : '')
   let next = row
   for (const cell of ['heat', 'lot', 'material'] satisfies CellName[]) {
