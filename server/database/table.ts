@@ -1,4 +1,5 @@
-import { DataTypes, Model, type ModelAttributes, type ModelStatic } from 'sequelize'
+import type { Model} from 'sequelize';
+import { DataTypes, type ModelAttributes, type ModelStatic } from 'sequelize'
 import { v7 } from 'uuid'
 import type { Column } from './columns.ts'
 import { database } from './connection.ts'

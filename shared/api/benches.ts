@@ -10,7 +10,7 @@ export type EquipmentState = z.infer<typeof EquipmentState>
 
 export const Bench = z.object({
   id: Id, siteId: Id, siteName: z.string(), name: z.string(), code: z.string(), units: z.int(), out: z.boolean(),
-  does: z.array(z.object({ kind: z.string(), limits: z.record(z.string(), z.tuple([z.number(), z.number()])) })), equipment: EquipmentState.nullable(),
+  does: z.array(z.object({ kind: z.string(), /** The method's title, or the kind of preparation: a list of benches needs no method's code for it. */ label: z.string(), limits: z.record(z.string(), z.tuple([z.number(), z.number()])) })), equipment: EquipmentState.nullable(),
 })
 export type Bench = z.infer<typeof Bench>
 

@@ -24,7 +24,7 @@ export async function call<P extends z.ZodType, Q extends z.ZodType, B extends z
 /** The address of an operation, for links and downloads too. */
 export function addressOf(e: Pick<Endpoint, 'path'>, params: unknown = {}, query: unknown = {}): string {
   const path = e.path.replace(/:(\w+)/g, (_, name: string) => encodeURIComponent(String((params as Record<string, unknown>)[name])))
-  const search = new URLSearchParams(Object.entries((query ?? {}) as Record<string, unknown>).flatMap(([key, value]) => (value === undefined || value === null || value === '' ? [] : [[key, String(value)]])))
+  const search = new URLSearchParams(Object.entries((query ?? {}) as Record<string, string | number | boolean | null | undefined>).flatMap(([key, value]) => (value === undefined || value === null || value === '' ? [] : [[key, String(value)]])))
   return `/api${path}${search.size > 0 ? `?${search.toString()}` : ''}`
 }
 

@@ -37,13 +37,13 @@ export async function startFaultHouse({ apis = 1 } = {}) {
   return {
     house, mail, stripe, addresses,
     signIn: (person: { email: string }, api = 0) => signIn(addresses[api]!, person),
-    startWorker() {
+    startWorker: () => {
       const worker = startProcess('worker/index.ts', settings)
       workers.push(worker)
       return worker
     },
-    async killRedis() { await redis?.kill(); redis = null },
-    async startRedis() { redis = await startRedis(redisPort) },
+    killRedis: async () => { await redis?.kill(); redis = null },
+    startRedis: async () => { redis = await startRedis(redisPort) },
     /** The mails that reached someone, by address. */
     mailsTo: (address: string) => mail.messages().filter(({ to }) => JSON.stringify(to).includes(address)),
   }

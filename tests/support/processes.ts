@@ -51,7 +51,7 @@ export async function freePort(): Promise<number> {
 }
 
 /** Waits until something is so; says what it waited for when it does not come. */
-export async function until<T>(what: string, check: () => Promise<T | false | null | undefined>, seconds = 60): Promise<T> {
+export async function until<T>(what: string, check: () => T | false | null | undefined | Promise<T | false | null | undefined>, seconds = 60): Promise<T> {
   const end = Date.now() + seconds * 1000
   let last: unknown
   while (Date.now() < end) {

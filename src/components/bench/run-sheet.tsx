@@ -21,9 +21,9 @@ import { KeptSign } from './kept-sign.tsx'
 import { RemarkField } from './remark-field.tsx'
 import { SheetFoot } from './sheet-foot.tsx'
 import { SheetHead } from './sheet-head.tsx'
-import { StopDialog } from './stop-dialog.tsx'
+import { StopDialog } from './dialogs/stop-dialog.tsx'
 import { stopperOf } from './stopper-of.ts'
-import { StrikeDialog } from './strike-dialog.tsx'
+import { StrikeDialog } from './dialogs/strike-dialog.tsx'
 import { useReadingQueue } from './use-reading-queue.ts'
 
 type Asked = { key: string; entry?: Entry; refill?: Record<string, string> | undefined }

@@ -3,7 +3,7 @@ import { grainRules, grainSizeNumber, grainStandards } from '../../../shared/gra
 import { RadioGroup } from '../../components/ui/fields/radio-group.tsx'
 import { formatNumber } from '../../lib/format.ts'
 import type { SheetViewProps } from '../sheet-view.ts'
-import type { GridColumn } from '../set/readings-grid.tsx'
+import type { GridColumn } from '../set/grid-column.ts'
 import { plural, SetView } from '../set/set-view.tsx'
 import { fieldsWanted } from './fields-wanted.ts'
 

@@ -1,7 +1,7 @@
 import { formFields } from '../../../shared/method/form.ts'
 import { RockwellParameters, type RockwellReading } from '../../../shared/hardness/rockwell/rockwell-input.ts'
 import type { SheetViewProps } from '../sheet-view.ts'
-import type { GridColumn } from '../set/readings-grid.tsx'
+import type { GridColumn } from '../set/grid-column.ts'
 import { counting } from '../../lib/kept-readings/sheet-readings.ts'
 import { plural, SetView } from '../set/set-view.tsx'
 import { TestPieceMap } from './test-piece-map.tsx'

@@ -6,7 +6,7 @@ import { classNames } from '../../components/ui/class-names.ts'
 import { Icon } from '../../components/ui/icon.tsx'
 import { formatNumber } from '../../lib/format.ts'
 import type { SheetViewProps } from '../sheet-view.ts'
-import type { GridColumn } from './readings-grid.tsx'
+import type { GridColumn } from './grid-column.ts'
 import type { SetRow } from './set-rows.ts'
 import { shortMessage } from './short-message.ts'
 

@@ -1,5 +1,4 @@
 import { useId, useRef, type KeyboardEvent, type ReactNode } from 'react'
-import type { NumberField } from '../../../shared/method/field.ts'
 import { checkEntry } from '../../../shared/method/check-entry.ts'
 import { Icon } from '../../components/ui/icon.tsx'
 import { Kbd } from '../../components/ui/kbd.tsx'
@@ -8,11 +7,9 @@ import { useKeys } from '../../components/ui/buttons/use-keys.ts'
 import { cellName, typedRow } from '../pending-entries.ts'
 import type { SheetViewProps } from '../sheet-view.ts'
 import { GridCell } from './grid-cell.tsx'
+import type { GridColumn } from './grid-column.ts'
 import { GridRow } from './grid-row.tsx'
 import { nextRow, setRows } from './set-rows.ts'
-
-/** A column: the field of the method's schema, and how its head says it. */
-export type GridColumn = { field: NumberField; head: ReactNode; unit?: string | undefined; decimals?: number }
 
 /**
  * Rows of numbers at the bench: kept ones above and below, the one being typed as a row of fields. Enter keeps it and goes on, ↑ ↓ go

@@ -7,7 +7,8 @@ import { ResultFacts } from '../results/result-facts.tsx'
 import { SheetColumns } from '../results/sheet-columns.tsx'
 import { cellName } from '../pending-entries.ts'
 import type { SheetViewProps } from '../sheet-view.ts'
-import { ReadingsGrid, type GridColumn } from './readings-grid.tsx'
+import type { GridColumn } from './grid-column.ts'
+import { ReadingsGrid } from './readings-grid.tsx'
 import { setRows } from './set-rows.ts'
 
 /** Any method whose readings are rows of numbers: the grid, what it breaks, and the results. A method's own view adds to it. */

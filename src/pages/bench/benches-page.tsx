@@ -1,7 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
 import { Link } from 'react-router-dom'
 import type { Bench } from '../../../shared/api/benches.ts'
-import { methodOf } from '../../../shared/methods.ts'
 import { benchesQuery, queueQuery } from '../../api/benches.ts'
 import { useMe } from '../../api/session.ts'
 import { Machine } from '../../components/bench/sheet-head.tsx'
@@ -39,7 +38,7 @@ function OneBench({ bench }: { bench: Bench }) {
     <li>
       <Link to={`/bench/${bench.id}`} className={`on-sheet block h-full border bg-sheet p-4 no-underline hover:bg-wash ${isMine ? 'border-ink shadow-[inset_4px_0_var(--ink)]' : 'border-line'}`}>
         <span className="flex items-baseline justify-between gap-3"><b className="text-17">{bench.name}</b><span className="mono text-13 text-quiet">{bench.code}</span></span>
-        <span className="block text-quiet">{bench.does.map(({ kind }) => methodOf(kind)?.title ?? kind).join(', ')}</span>
+        <span className="block text-quiet">{bench.does.map(({ label }) => label).join(', ')}</span>
         <span className="mt-1 block">{bench.out ? <span className="text-red">out of use</span> : data ? `${data.items.length} to do${here !== undefined && here < data.items.length ? `, ${here} here` : ''}` : ' '}{isMine && <span className="text-quiet">, yours last</span>}</span>
         {bench.equipment && <span className="mt-1 block text-13 text-quiet"><Machine equipment={bench.equipment} zone={data?.timeZone ?? 'UTC'} /></span>}
       </Link>

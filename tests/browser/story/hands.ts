@@ -47,6 +47,7 @@ export const tensile = ({ file, diameter, gaugeLength, finalGaugeLength, finalDi
   await page.getByText(/^Record of [\d,.\s]+ points, kept/).waitFor()
   await typeNamed(page, 'Lu after the pull', finalGaugeLength)
   await typeNamed(page, 'Diameter at the neck 1', finalDiameter)
+  await page.getByRole('button', { name: /^Z \d+ %/ }).waitFor()
   await page.getByRole('group', { name: /^Stress against extension.*, Rp0\.2 / }).waitFor()
 }
 

@@ -55,13 +55,12 @@ export function withCell(row: DraftRow, cell: CellName, text: string, typing = f
   const size = cellText(row, 'size')
   // a size is read by its form; without one it waits as text, so that the order never holds a size of the wrong form
   if (!form) return { ...row, sample: { ...row.sample, piece: { form: row.sample.piece.form } }, size, unread: { ...row.unread, form: text } }
-  const { form: _read, ...unread } = row.unread
-  return withSize({ ...row, unread }, form, form === row.sample.piece.form ? size : size.replace(/^[Øø⌀]\s*/, ''))
+  return withSize({ ...row, unread: without(row.unread, 'form') }, form, form === row.sample.piece.form ? size : size.replace(/^[Øø⌀]\s*/, ''))
 }
 
 function withSize(row: DraftRow, form: Piece['form'], text: string): DraftRow {
   const { piece } = readSize(form, text)
-  const { size: _read, ...unread } = row.unread
+  const unread = without(row.unread, 'size')
   if (!piece) return { ...row, sample: { ...row.sample, piece: { form } }, unread: { ...unread, size: text } }
   return { ...row, sample: { ...row.sample, piece }, unread, size: text }
 }
@@ -69,8 +68,7 @@ function withSize(row: DraftRow, form: Piece['form'], text: string): DraftRow {
 /** When the cursor leaves a form it is read by how it begins, and a size is written as the trade writes it. */
 export function tidied(row: DraftRow): DraftRow {
   if (row.unread.form !== undefined) return withCell(row, 'form', row.unread.form)
-  const { size: _typed, ...rest } = row
-  return rest
+  return without(row, 'size')
 }
 
 /** A product form by its name or how it begins: "Bar", "forg". */
@@ -91,8 +89,7 @@ export function unreadWords(row: DraftRow, cell: UnreadCell): string {
 export function withTick(state: DraftState, key: string, ids: ReadonlySet<string>, ticked: boolean): DraftState {
   return withRows(state, ids, ({ sample, ...row }) => {
     const others = sample.tests.filter((test) => test !== key)
-    const { [key]: _own, ...overrides } = sample.overrides
-    return { ...row, sample: { ...sample, tests: ticked ? [...others, key] : others, overrides: ticked ? sample.overrides : overrides } }
+    return { ...row, sample: { ...sample, tests: ticked ? [...others, key] : others, overrides: ticked ? sample.overrides : without(sample.overrides, key) } }
   })
 }
 
@@ -108,6 +105,12 @@ export function freeKey(columns: readonly OrderColumn[]): string {
 export function withoutColumn(state: DraftState, key: string): DraftState {
   const untouched = withTick(state, key, new Set(state.rows.map(({ id }) => id)), false)
   return { ...untouched, columns: state.columns.filter((column) => column.key !== key) }
+}
+
+function without<T extends object, K extends keyof T>(whole: T, key: K): Omit<T, K> {
+  const rest = { ...whole }
+  delete rest[key]
+  return rest
 }
 
 /** A copy of a row under it. */

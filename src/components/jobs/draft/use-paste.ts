@@ -16,18 +16,18 @@ export function usePaste({ state, change, undo }: Pick<OrderDraft, 'state' | 'ch
   }
   return {
     last,
-    async take(text: string, at: { row: number; cell: number }) {
+    take: async (text: string, at: { row: number; cell: number }) => {
       // spreadsheets quote cells that hold tabs, quotes or line breaks; the reader of such tables is fetched when one is pasted
       const { default: papa } = await import('papaparse')
       const { data } = papa.parse<string[]>(text, { delimiter: text.includes('\t') ? '\t' : '', skipEmptyLines: true })
       put(state, data, at)
     },
-    again(columns: readonly PastedColumn[]) {
+    again: (columns: readonly PastedColumn[]) => {
       if (!last) return
       const before = { ...state, rows: state.rows.filter((row) => !last.pasted.state.rows.slice(-last.pasted.count).some(({ id }) => id === row.id)) }
       put(before, last.table, last.at, columns)
     },
-    undo() {
+    undo: () => {
       setLast(null)
       undo()
     },

@@ -1,6 +1,6 @@
 import * as Radix from '@radix-ui/react-dialog'
-import { Button } from '../ui/buttons/button.tsx'
-import { Kbd } from '../ui/kbd.tsx'
+import { Button } from '../../ui/buttons/button.tsx'
+import { Kbd } from '../../ui/kbd.tsx'
 
 const keys: readonly (readonly [string, string])[] = [
   ['N', 'next in the queue'], ['/', 'scan or search'], ['B', 'begin the run, or start the step'], ['Enter', 'keep the reading and go on'], ['↑ ↓', 'through the rows; on a grip 10 MPa, with Shift 1 MPa'], ['S', 'strike out, with a reason'],

@@ -1,7 +1,7 @@
 import { useState } from 'react'
-import { Dialog } from '../ui/feedback/dialog.tsx'
-import { RadioGroup } from '../ui/fields/radio-group.tsx'
-import { TextField } from '../ui/fields/text-field.tsx'
+import { Dialog } from '../../ui/feedback/dialog.tsx'
+import { RadioGroup } from '../../ui/fields/radio-group.tsx'
+import { TextField } from '../../ui/fields/text-field.tsx'
 
 const ready = ['typed wrong', 'wrong place', 'the piece moved', 'the indenter or grip slipped', 'the machine was at fault']
 const own = 'own words'

@@ -1,6 +1,6 @@
 import { useState } from 'react'
-import { Dialog } from '../ui/feedback/dialog.tsx'
-import { TextArea } from '../ui/fields/text-area.tsx'
+import { Dialog } from '../../ui/feedback/dialog.tsx'
+import { TextArea } from '../../ui/fields/text-area.tsx'
 
 /** Asks why a run is given up. It stays on record, and the test is ready for another. */
 export function StopDialog({ busy, error, onStop, onClose }: { busy: boolean; error: string | undefined; onStop: (reason: string) => void; onClose: () => void }) {
