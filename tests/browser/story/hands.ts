@@ -57,7 +57,7 @@ export const grainCounts = (counts: readonly string[], lineMm: string): Hands =>
     await typing(page).fill(count)
     if (at === 0) {
       await page.keyboard.press('Tab')
-      await page.keyboard.type(lineMm)
+      await typeByHand(page, lineMm)
     }
     await page.keyboard.press('Enter')
     await page.getByLabel(`Field ${at + 2}, boundary intersections`).waitFor()

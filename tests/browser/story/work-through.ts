@@ -3,8 +3,18 @@ import { goTo, scan } from './scan.ts'
 
 export type Hands = (page: Page, number: string) => Promise<void>
 
-/** A sample's way to its next bench: its label scanned, the step opened from its page. */
+/** A sample's way to its next bench: its label scanned, the step opened from its page. When the plan moves it just then, once more. */
 export async function openStep(page: Page, number: string, step: string): Promise<void> {
+  for (let attempt = 0; attempt < 3; attempt++) {
+    await walkTo(page, number, step)
+    const sheet = page.getByRole('region', { name: 'Sheet' })
+    const moved = sheet.getByText('This step is no longer in the queue')
+    await moved.or(sheet.getByRole('heading', { level: 1, name: number })).or(sheet.getByText(number)).first().waitFor()
+    if (!(await moved.isVisible())) return
+  }
+}
+
+async function walkTo(page: Page, number: string, step: string): Promise<void> {
   await goTo(page, 'Bench')
   await page.getByRole('heading', { level: 1, name: 'Choose your bench' }).waitFor()
   await scan(page, number)

@@ -20,6 +20,7 @@ describe('the settings', () => {
     expect(readSettings({ ...complete, PATH: '/usr/bin', CROSSHEAD_DEMO: '1', STRIPE_API_BASE: '' })).toEqual({
       ...complete,
       NODE_ENV: 'development',
+      HOST: '127.0.0.1',
       PORT: 4300,
       BASE_URL: 'https://lab.example',
       CROSSHEAD_DEMO: true,

@@ -60,7 +60,8 @@ describe('the hardness sheet', () => {
   })
 
   it('never takes a letter as input: S strikes out the reading that breaks a rule', async () => {
-    const user = userEvent.setup()
+    // as a hand types: a letter that follows sooner than 50 ms belongs to a scanner's burst
+    const user = userEvent.setup({ delay: 90 })
     const onStrike = vi.fn()
     render(<Sheet onStrike={onStrike} first={[reading('readings.0', { value: 31.4, xMm: 10 }), reading('readings.1', { value: 31.9, xMm: 11.1 }), reading('readings.2', { value: 31.5, xMm: 16 })]} />)
     await user.keyboard('3s')
