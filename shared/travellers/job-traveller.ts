@@ -20,11 +20,17 @@ export function jobTraveller(
       kind: isTesting(step.type) ? 'test' : 'prep', stage: 'in work', label: step.label, at: null, place: null,
       ...shared({ total: step.total, done: step.done, now: step.started, held: step.held, back: step.sentBack }),
     })),
-    { kind: 'review', stage: 'in review', label: 'review', ...shared({ total: tests.total, done: tests.accepted, now: tests.recorded, held: 0, back: 0 }), at: null, place: null },
+    { kind: 'review', stage: 'in review', label: 'review', ...reviewed(tests), at: null, place: null },
     reportNode(job),
     ...(closed ? [closedNode(job)] : []),
   ]
   return job.state === 'cancelled' ? nodes.map((node) => (node.state === 'done' ? node : { ...node, state: 'void' })) : nodes
+}
+
+/** Review is on only when nothing is left to measure, so that the line reaches no further than the work. */
+function reviewed({ total, recorded, accepted }: TestTally): Pick<TravellerNode, 'state' | 'part'> {
+  const { part, state } = shared({ total, done: accepted, now: recorded, held: 0, back: 0 })
+  return { state: recorded + accepted === total ? state : 'todo', ...(part !== undefined && { part }) }
 }
 
 /** What stops all that is left comes before what runs, and what runs before what is merely part done. */

@@ -50,7 +50,9 @@ export function isTesting(type: StepKind): boolean {
 function reviewNode(tests: readonly TestNow[]): TravellerNode {
   const live = tests.filter(({ state }) => state !== 'void')
   const accepted = live.filter(({ state }) => state === 'accepted' || state === 'reported')
-  const state = live.length > 0 && accepted.length === live.length ? 'done' : live.some((test) => test.state === 'recorded') ? 'now' : accepted.length > 0 ? 'part' : 'todo'
+  // the line reaches as far as work has come: review is on only when nothing is left to measure
+  const waiting = live.filter(({ state: is }) => is === 'recorded').length
+  const state = live.length > 0 && accepted.length === live.length ? 'done' : waiting > 0 && waiting + accepted.length === live.length ? 'now' : 'todo'
   const at = state === 'done' ? accepted.map(({ acceptedAt }) => acceptedAt).reduce(later, null) : null
   return { kind: 'review', stage: 'in review', label: 'review', state, ...(live.length > 0 && { part: accepted.length / live.length }), at, place: null }
 }

@@ -33,11 +33,12 @@ describe('a sample\'s line', () => {
     expect(states(sampleTraveller({ job, sample, steps: [step('measure HRC', 'started')], tests: [test('in run', { sentBack: true })] }))).toContain('measure HRC now')
   })
 
-  it('is in review while a run waits, part done while some are accepted, and done with the last', () => {
+  it('is in review once every run waits or is accepted, not while something is left to measure, and done with the last', () => {
     const review = (...tests: TestNow[]) => sampleTraveller({ job, sample, steps: [], tests })[2]
     const accepted = test('accepted', { acceptedAt: '2026-03-12T10:00:00Z' })
     expect(review(test('recorded'), accepted)).toMatchObject({ state: 'now', part: 0.5 })
-    expect(review(test('in run'), accepted)).toMatchObject({ state: 'part', part: 0.5 })
+    expect(review(test('in run'), accepted)).toMatchObject({ state: 'todo', part: 0.5 })
+    expect(review(test('in run'), test('recorded'))?.state).toBe('todo')
     expect(review(accepted, test('void'))).toMatchObject({ state: 'done', at: '2026-03-12T10:00:00Z' })
     expect(review(test('void'))?.state).toBe('todo')
   })
@@ -56,7 +57,7 @@ describe('a job\'s line', () => {
 
   it('gives each node the share of samples that are past it', () => {
     const nodes = line([tally('section', { done: 4 }), tally('mount', { done: 1, started: 1 }), tally('etch', { done: 1 }), tally('pull', {})], 3)
-    expect(states(nodes)).toEqual(['placed done', 'receive part', 'section done', 'mount now', 'etch part', 'pull todo', 'review part', 'report todo'])
+    expect(states(nodes)).toEqual(['placed done', 'receive part', 'section done', 'mount now', 'etch part', 'pull todo', 'review todo', 'report todo'])
     expect(nodes.slice(1, 7).map(({ part }) => part)).toEqual([0.75, 1, 0.25, 0.25, 0, 0.25])
   })
 
