@@ -39,7 +39,7 @@ export async function makeJob({ customer, site: siteKey, reach, order, hold }: D
   await planSite(site.id, {}, nobody)
   if (reach === 'received') return
   const reviewer = await callerAs(people.find((person) => person.role === 'manager' && (siteKey === 'O' ? person.site === 'O' : person.site === null))!.email)
-  await measureSamples(samples.filter((_, at) => hold?.row !== at), { bench, reviewer: reach === 'in review' || reach === 'half measured' ? null : reviewer, stopAfter: reach === 'half measured' ? 2 : Infinity, seed })
+  await measureSamples(samples.filter((_, at) => hold?.row !== at), { bench, reviewer: reach === 'in review' || reach === 'half measured' ? null : reviewer, stopAfter: reach === 'half measured' ? 1 : Infinity, seed })
   await planSite(site.id, {}, nobody)
   if (reach === 'reported') await issueReport(saved.id, { version: (await Job.findByPk(saved.id, { raw: true }))!.version, password: demoPassword }, reviewer)
 }
