@@ -13,8 +13,6 @@ export const routes: RouteObject[] = [
     Component: AroundAll,
     HydrateFallback: NothingYet,
     errorElement: <PageFailed />,
-    // nothing is drawn before the first page's own code is there
-    hydrateFallbackElement: <></>,
     children: [
       { path: '/sign-in', lazy: () => import('./pages/sign-in/sign-in-page.tsx').then(({ SignInPage: Component }) => ({ Component })) },
       { path: '/forgotten', lazy: () => import('./pages/sign-in/forgotten-page.tsx').then(({ ForgottenPage: Component }) => ({ Component })) },

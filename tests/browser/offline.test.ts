@@ -3,7 +3,7 @@ import { openBrowser } from '../support/browser.ts'
 import { startProduct } from '../support/product.ts'
 import { typeReading } from './story/hands.ts'
 import { goTo, scan } from './story/scan.ts'
-import { openStep, prepare } from './story/work-through.ts'
+import { beginRun, prepare } from './story/work-through.ts'
 
 const product = await startProduct()
 const browser = await openBrowser(product.address)
@@ -19,9 +19,7 @@ it('keeps readings typed without a line, through the closing of the tab, and bri
   await page.keyboard.press('Enter')
   await page.getByText(`${number} received.`).waitFor()
   await prepare(page, number, 'section')
-  await openStep(page, number, 'measure HRC')
-  await page.getByRole('button', { name: 'Begin run B', disabled: false }).waitFor()
-  await page.keyboard.press('b')
+  await beginRun(page, number, 'measure HRC')
   await typeReading(page, '33.1')
   await page.getByRole('status').filter({ hasText: /^(kept |all kept)/ }).waitFor()
   const address = page.url()

@@ -30,7 +30,7 @@ export async function openBrowser(address: string): Promise<People> {
   const expected: RegExp[] = []
 
   afterEach(async ({ task }) => {
-    if (task.result?.state === 'fail') await picture(contexts, task.name)
+    if (task.result?.state === 'fail') await picture(contexts, `${task.suite?.name ?? ''} ${task.name}`)
     const unexpected = faults.splice(0).filter((words) => !expected.some((pattern) => pattern.test(words)))
     expected.length = 0
     expect(unexpected, 'what the pages complained about').toEqual([])
@@ -67,7 +67,7 @@ export async function openBrowser(address: string): Promise<People> {
 async function picture(contexts: ReadonlySet<BrowserContext>, name: string): Promise<void> {
   const pages = [...contexts].flatMap((context) => context.pages())
   for (const [at, page] of pages.entries()) {
-    const path = `.build/failures/${name.replaceAll(/[^a-z0-9]+/gi, '-').slice(0, 80)}-${at + 1}.png`
+    const path = `.build/failures/${name.replaceAll(/[^a-z0-9]+/gi, '-').slice(0, 100)}-${at + 1}.png`
     await page.screenshot({ path, fullPage: true, timeout: 5000 }).catch(() => undefined)
   }
 }

@@ -39,7 +39,7 @@ export function RunSheet({ run, method, onRecorded, onStopped }: { run: TestRun;
   const record = useRecordRun(run.id)
   const stop = useStopRun(run.id)
   const addRecord = useAddRecord(run.id)
-  const readings = useMemo(() => sheetReadings(run.readings, state), [run.readings, state])
+  const readings = useMemo(() => sheetReadings(state.kept, state), [state])
   const entries = useMemo((): Entry[] => [...counting(readings), ...pendingEntries(method, typed, readings)].map(({ path, value }) => ({ path, value })), [method, typed, readings])
   const shown = useDeferredValue(entries)
   const live = useMemo(() => liveOf(method, run, shown), [method, run, shown])

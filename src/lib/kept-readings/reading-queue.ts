@@ -1,10 +1,12 @@
-import type { SaveReadings, TestRun } from '../../../shared/api/test-runs.ts'
+import type { Reading, SaveReadings, TestRun } from '../../../shared/api/test-runs.ts'
 import { Refusal } from '../refusal.ts'
 import { clashing } from './clashing.ts'
 import type { ReadingStore } from './reading-store.ts'
 import { nameOf, type Unsent } from './unsent.ts'
 
 export type QueueState = {
+  /** What the server has. It changes together with `unsent`, or a reading would be in neither for a moment and its row look free. */
+  kept: readonly Reading[]
   unsent: readonly Unsent[]
   /** `waiting`: the server cannot be reached and is tried again. `stopped`: it said no to all of it; `problem` says why. */
   going: 'idle' | 'sending' | 'waiting' | 'stopped'
@@ -47,7 +49,7 @@ const mostAtOnce = 200
  */
 export function createReadingQueue({ store, run: first, send, refetch, onRun, now = Date.now, pauses = usualPauses }: Given) {
   let run = first
-  let state: QueueState = { unsent: [], going: 'idle', problem: '', keptAt: null, clashes: new Set(), refused: {}, isStored: true }
+  let state: QueueState = { kept: first.readings, unsent: [], going: 'idle', problem: '', keptAt: null, clashes: new Set(), refused: {}, isStored: true }
   const listeners = new Set<() => void>()
   let busy = false
   let closed = false
@@ -57,7 +59,7 @@ export function createReadingQueue({ store, run: first, send, refetch, onRun, no
 
   function set(change: Partial<QueueState>): void {
     const unsent = change.unsent ?? state.unsent
-    state = { ...state, ...change, clashes: clashing(run.readings, unsent) }
+    state = { ...state, ...change, kept: run.readings, clashes: clashing(run.readings, unsent) }
     for (const listener of listeners) listener()
   }
   /** The clock, never standing still, so that order survives the store. */

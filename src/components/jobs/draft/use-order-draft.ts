@@ -79,10 +79,13 @@ export function useOrderDraft(job: Job, locked: boolean): OrderDraft {
     }
   }, [client, job.id, mutateAsync, onServer])
 
-  const save = useCallback(async (): Promise<number> => {
-    await running.current?.catch(() => undefined)
-    running.current = send().finally(() => { running.current = null })
-    return running.current
+  /** One after the other: two that go at once would name the same version, and the second be taken for a change made elsewhere. */
+  const save = useCallback((): Promise<number> => {
+    const turn = (running.current ?? Promise.resolve(0)).catch(() => 0).then(send)
+    running.current = turn
+    const over = () => { if (running.current === turn) running.current = null }
+    turn.then(over, over)
+    return turn
   }, [send])
 
   const stopped = locked || conflict
