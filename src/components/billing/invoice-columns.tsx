@@ -9,7 +9,7 @@ import { invoiceStanding } from './invoice-standing.ts'
 /** The columns of the list of invoices; `manyCustomers`: the row says whose it is. */
 export function invoiceColumns({ currency, manyCustomers }: { currency: string; manyCustomers: boolean }): Column<InvoiceRow>[] {
   return [
-    { id: 'number', head: 'Invoice', card: 'start', nowrap: true, value: ({ number }) => number, cell: ({ id, number, jobId, jobNumber }) => <><Link to={`/invoices/${id}`} className="mono font-medium">{number}</Link><Two>for <Link to={`/jobs/${jobId}`} className="mono">{jobNumber}</Link></Two></> },
+    { id: 'number', head: 'Invoice', card: 'start', nowrap: true, value: ({ number }) => number, cell: ({ id, number, jobId, jobNumber }) => <><Link to={`/invoices/${id}`} className="mono inline-block font-medium leading-6">{number}</Link><Two>for <Link to={`/jobs/${jobId}`} className="mono">{jobNumber}</Link></Two></> },
     ...(manyCustomers ? [{ id: 'customer', head: 'Customer', value: ({ customerName }: InvoiceRow) => customerName, cell: ({ customerName }: InvoiceRow) => customerName }] : []),
     { id: 'order', head: 'Order', value: ({ purchaseOrder }) => purchaseOrder, cell: ({ purchaseOrder }) => purchaseOrder || <span className="text-quiet">none</span> },
     { id: 'what', head: 'For', sort: false, value: ({ lines }) => lines.map(({ name, count }) => `${count} × ${name}`).join(', '), cell: ({ lines }) => lines.map(({ name, count }) => `${count} × ${name}`).join(', ') },

@@ -1,6 +1,7 @@
-import { useRouteError } from 'react-router-dom'
+import { Link, useRouteError } from 'react-router-dom'
 import { MessageCard } from '../ui/feedback/message-card.tsx'
 import { Button } from '../ui/buttons/button.tsx'
+import { PageTitle } from '../ui/page-title.tsx'
 
 /** A page that could not be drawn or fetched; nothing typed is lost by reloading. */
 export function PageFailed() {
@@ -17,5 +18,10 @@ export function PageFailed() {
 
 /** An address that leads nowhere. */
 export function NoSuchPage() {
-  return <MessageCard icon="stop" title="There is no such page">Check the address, or begin at the first page.</MessageCard>
+  return (
+    <>
+      <PageTitle title="There is no such page" />
+      <p>Check the address, or begin at <Link to="/">the first page</Link>.</p>
+    </>
+  )
 }

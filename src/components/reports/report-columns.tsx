@@ -12,7 +12,7 @@ export function reportColumns({ zone, manyCustomers }: { zone: string; manyCusto
   return [
     {
       id: 'search', head: 'Report', name: 'Report', sort: false, card: 'start', nowrap: true, value: ({ number, revision }) => fullNumber({ number, revision }), filter: { kind: 'text', words: 'report, job or order' },
-      cell: (row) => <><Link to={`/reports?open=${row.id}`} className="mono font-medium">{fullNumber(row)}</Link><Two>of <Link to={`/jobs/${row.jobId}`} className="mono">{row.jobNumber}</Link></Two></>,
+      cell: (row) => <><Link to={`/reports?open=${row.id}`} className="mono inline-block font-medium leading-6">{fullNumber(row)}</Link><Two>of <Link to={`/jobs/${row.jobId}`} className="mono">{row.jobNumber}</Link></Two></>,
     },
     ...(manyCustomers ? [{ id: 'customer', head: 'Customer', sort: false, value: ({ customerName }: ReportRow) => customerName, cell: ({ customerName }: ReportRow) => customerName }] : []),
     { id: 'order', head: 'Order', sort: false, value: ({ purchaseOrder }) => purchaseOrder, cell: ({ purchaseOrder }) => purchaseOrder || <span className="text-quiet">none</span> },

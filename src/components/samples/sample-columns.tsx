@@ -13,7 +13,7 @@ export function sampleColumns({ zone, manyCustomers }: { zone: string; manyCusto
   return [
     {
       id: 'search', head: 'Sample', name: 'Sample', sort: false, card: 'start', nowrap: true, value: ({ number }) => number, filter: { kind: 'text', words: 'number, heat, lot, code' },
-      cell: ({ id, number, jobId, jobNumber }) => <><Link to={`/samples/${id}`} className="mono font-medium">{number}</Link><Two>of <Link to={`/jobs/${jobId}`} className="mono">{jobNumber}</Link></Two></>,
+      cell: ({ id, number, jobId, jobNumber }) => <><Link to={`/samples/${id}`} className="mono inline-block font-medium leading-6">{number}</Link><Two>of <Link to={`/jobs/${jobId}`} className="mono">{jobNumber}</Link></Two></>,
     },
     ...(manyCustomers ? [{ id: 'customer', head: 'Customer', sort: false, value: ({ customerName }: SampleRow) => customerName, cell: ({ customerName, siteName }: SampleRow) => <>{customerName}<Two>{siteName}</Two></> }] : []),
     { id: 'heat', head: 'Heat and lot', sort: false, value: ({ heat, lot }) => [heat, lot].filter(Boolean).join(' / '), cell: ({ heat, lot }) => <><span className="mono">{heat || '–'}</span><Two>{lot ? <>lot <span className="mono">{lot}</span></> : 'no lot'}</Two></> },

@@ -63,6 +63,6 @@ export async function everyPage({ query }: Product): Promise<OpenPage[]> {
     { route: '/floor', who: 'manager', address: '/floor', ready: heading(/^Floor/) },
     { route: '/people', who: 'manager', address: '/people', ready: heading('People'), deed: link(/Invite/) },
     { route: '/jobs', who: 'manager', address: '/jobs', ready: heading('Jobs'), deed: link(/^J-26-/) },
-    { route: '*', who: 'manager', address: '/nowhere', ready: heading(/./), deed: link(/./) },
+    { route: '*', who: 'manager', address: '/nowhere', ready: heading('There is no such page'), deed: link('the first page') },
   ]
 }
