@@ -18,7 +18,7 @@ export function SheetFoot({ kept, cautions = [], stopper, stopperId, isCalm = fa
         </details>
       )}
       <div className="flex min-w-0 flex-1 items-center justify-end gap-3 [&>:not([role=status])]:flex-none">
-        {stopper && <span id={stopperId} role="status" className={`max-w-70 min-w-0 text-right font-medium ${isCalm ? 'text-quiet' : 'text-red'}`}>{stopper}</span>}
+        {stopper && <span id={stopperId} role="status" className={`max-w-70 min-w-0 text-right desk:min-w-60 font-medium ${isCalm ? 'text-quiet' : 'text-red'}`}>{stopper}</span>}
         {children}
       </div>
     </footer>

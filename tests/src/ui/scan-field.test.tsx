@@ -46,6 +46,13 @@ describe('the scan field', () => {
     expect(onScan).toHaveBeenCalledWith('J-26-00417-03')
   })
 
+  it('leaves the digits of a gauge that types to the number grid: they are a reading, not a code', () => {
+    const onScan = vi.fn()
+    render(<Page onScan={onScan} />)
+    keys(screen.getByLabelText('Reading'), '31.25', 5)
+    expect(onScan).not.toHaveBeenCalled()
+  })
+
   it('does not let the letters of a code act as keys', async () => {
     const onStrike = vi.fn()
     render(<Page onScan={() => undefined} onStrike={onStrike} />)
